@@ -1,0 +1,25 @@
+import { randomUUID } from "node:crypto";
+import { notFound, redirect } from "next/navigation";
+import { cache } from "react";
+import type { ProjectId } from "@/lib/contracts/ids";
+import type { Context } from "@/lib/services/context";
+import type { SignedIn } from "@/lib/services/accounts/session-holder";
+import { rolesInProject } from "@/lib/services/members/roles-in-project";
+import { currentPerson } from "./session";
+
+/** The signed-in person of a page; sends anybody else to sign in and back here afterwards. */
+export async function pagePerson(here: string): Promise<SignedIn> {
+  const person = await currentPerson();
+  if (!person) redirect(`/sign-in?callbackUrl=${encodeURIComponent(here)}`);
+  return person;
+}
+
+/** The context of a page inside a project; a stranger finds nothing there. */
+export const pageContext = cache(async (project: string): Promise<Context> => {
+  const person = await pagePerson(`/projects/${project}`);
+  if (!/^[0-9a-f-]{36}$/i.test(project)) notFound();
+  const projectId = project as ProjectId;
+  const roles = await rolesInProject(person.id, projectId);
+  if (roles.length === 0) notFound();
+  return { person, projectId, roles, requestId: randomUUID() };
+});
