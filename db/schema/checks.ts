@@ -179,6 +179,7 @@ export const consequence = pgTable(
     foreignKey({ columns: [t.projectId, t.changeId], foreignColumns: [change.projectId, change.id] }),
     foreignKey({ columns: [t.projectId, t.footingId], foreignColumns: [footing.projectId, footing.id] }),
     unique("consequence_once").on(t.projectId, t.changeId, t.footingId),
+    index("consequence_footing").on(t.projectId, t.footingId),
   ],
 );
 
