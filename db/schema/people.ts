@@ -16,6 +16,23 @@ export const person = pgTable("person", {
   createdAt: moment("created_at").notNull().defaultNow(),
 });
 
+/** One sign-in that is still open or has ended. A cookie names it; ending the row ends the cookie at once. */
+export const personSession = pgTable(
+  "person_session",
+  {
+    id: uuid("id").primaryKey().defaultRandom(),
+    personId: id<PersonId>("person_id")
+      .notNull()
+      .references(() => person.id),
+    startedAt: moment("started_at").notNull().defaultNow(),
+    /** When it was last used, to the minute; an idle session ends. */
+    seenAt: moment("seen_at").notNull().defaultNow(),
+    address: text("address").notNull(),
+    endedAt: moment("ended_at"),
+  },
+  (t) => [index("person_session_open").on(t.personId, t.endedAt)],
+);
+
 /** One attempt to sign in, kept to slow down guessing by account and by address. */
 export const signInAttempt = pgTable(
   "sign_in_attempt",
