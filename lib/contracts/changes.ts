@@ -1,14 +1,11 @@
 import { z } from "zod";
 import type { ChangeId, ConsequenceId, FootingId, PersonId, ValueId } from "./ids";
+import { plainText } from "./plain-text";
 
 const uuid = <Brand extends string>() => z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
 
 const changeId = uuid<ChangeId>();
-const reason = z
-  .string()
-  .trim()
-  .min(10, "Say why in a sentence: it is kept for ever and read by others.")
-  .max(4000, "At most 4000 characters.");
+const reason = plainText(4000).trim().min(10, "Say why in a sentence: it is kept for ever and read by others.");
 
 export const outcomes = ["now fails", "still fails", "outside conditions", "recovers", "holds"] as const;
 export type OutcomeName = (typeof outcomes)[number];
@@ -27,9 +24,9 @@ export const readChangeInput = z.strictObject({
   outcome: z.enum(outcomes).optional(),
   state: z.enum(["open", "answered"]).optional(),
   poured: z.enum(["yes", "no"]).optional(),
-  search: z.string().max(100).optional(),
+  search: plainText(100).optional(),
   /** As the page before gave it in `next`. */
-  after: z.string().max(200).optional(),
+  after: plainText(200).optional(),
   limit: pageOf,
 });
 export const acceptConsequencesInput = z.strictObject({
@@ -38,7 +35,7 @@ export const acceptConsequencesInput = z.strictObject({
   reason,
 });
 export const referConsequencesInput = acceptConsequencesInput;
-export const closeChangeInput = z.strictObject({ changeId, note: z.string().trim().max(4000).default("") });
+export const closeChangeInput = z.strictObject({ changeId, note: plainText(4000).trim().default("") });
 
 export type ListChangesInput = z.input<typeof listChangesInput>;
 export type ReadChangeInput = z.input<typeof readChangeInput>;

@@ -8,14 +8,13 @@ import type {
   ValueRevisionId,
   ZoneId,
 } from "./ids";
+import { plainText } from "./plain-text";
 import type { ValueFieldName } from "./value-words";
 
 const uuid = <Brand extends string>() => z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
 
-const wordsUpTo = (limit: number) => z.string().max(limit, `At most ${limit} characters.`);
-
 /** A quantity as typed: kept word for word in the draft, read with its unit when the draft is checked. */
-const typed = z.union([wordsUpTo(60), z.number()], "A number, or a number with its unit.").nullable();
+const typed = z.union([plainText(60), z.number()], "A number, or a number with its unit.").nullable();
 
 const choice = <const Words extends readonly [string, ...string[]]>(...words: Words) =>
   z.enum(words, `One of: ${words.join(", ")}.`).nullable();
@@ -24,9 +23,9 @@ const choice = <const Words extends readonly [string, ...string[]]>(...words: Wo
 export const draftSource = z.strictObject({
   documentRevisionId: uuid<DocumentRevisionId>(),
   page: z.int("A whole page number.").min(1, "Pages begin at 1.").max(100_000, "No report has so many pages.").nullable(),
-  clause: wordsUpTo(200),
-  note: wordsUpTo(1000),
-  holes: z.array(wordsUpTo(60)).max(200, "At most 200 holes."),
+  clause: plainText(200),
+  note: plainText(1000),
+  holes: z.array(plainText(60)).max(200, "At most 200 holes."),
 });
 
 /** The draft of a revision: any field may still be missing. Choices that a person must make have no default. */
@@ -48,17 +47,17 @@ export const draftContent = z
     highestFoundingLevel_m: typed,
     lowestFoundingLevel_m: typed,
     groundwaterLevel_m: typed,
-    groundwaterBasis: wordsUpTo(1000),
+    groundwaterBasis: plainText(1000),
     soilUnitWeight_kNm3: typed,
     drainage: choice("drained", "undrained", "both"),
     transientIncrease: choice("none", "granted"),
     transientFactor: typed,
     accidentalFactor: typed,
-    neighbours: wordsUpTo(2000),
-    conditions: wordsUpTo(4000),
+    neighbours: plainText(2000),
+    conditions: plainText(4000),
     basis: choice("recommended", "assumed", "presumptive"),
-    confirmBy: wordsUpTo(10).nullable(),
-    confirmWho: wordsUpTo(200).nullable(),
+    confirmBy: plainText(10).nullable(),
+    confirmWho: plainText(200).nullable(),
     purpose: choice("preliminary", "for-design"),
     reasonCode: choice(
       "first",
@@ -71,7 +70,7 @@ export const draftContent = z
       "error",
       "report",
     ),
-    reason: wordsUpTo(4000),
+    reason: plainText(4000),
     sources: z.array(draftSource).max(50, "At most 50 sources."),
   })
   .partial();
@@ -94,7 +93,7 @@ export const listValuesInput = z.strictObject({
   zoneId: uuid<ZoneId>().optional(),
   groundUnitId: uuid<GroundUnitId>().optional(),
   state: z.enum(["issued", "checked", "draft", "withdrawn", "empty"]).optional(),
-  search: z.string().max(100).optional(),
+  search: plainText(100).optional(),
 });
 export const readValueInput = z.strictObject({ valueId });
 export const saveDraftInput = z.strictObject({ valueId, content: draftContent, revision });
@@ -103,20 +102,20 @@ export const checkDraftInput = z.strictObject({
   valueId,
   revision,
   /** Findings that ask "sure?", named by code: each has to be confirmed by the checker. */
-  confirmed: z.array(z.string().max(60)).max(20).default([]),
+  confirmed: z.array(plainText(60)).max(20).default([]),
 });
 export const issueRevisionInput = z.strictObject({ valueId, revisionId: uuid<ValueRevisionId>(), revision });
 export const withdrawRevisionInput = z.strictObject({
   valueId,
   revisionId: uuid<ValueRevisionId>(),
   revision,
-  reason: z.string().trim().min(10, "Say why in a sentence: it is read by everyone who relies on the value.").max(4000),
+  reason: plainText(4000).trim().min(10, "Say why in a sentence: it is read by everyone who relies on the value."),
 });
 export const confirmSourceInput = z.strictObject({
   valueId,
   revisionId: uuid<ValueRevisionId>(),
   documentRevisionId: uuid<DocumentRevisionId>(),
-  reason: z.string().trim().min(10, "Say in a sentence why the value stands as it is.").max(4000),
+  reason: plainText(4000).trim().min(10, "Say in a sentence why the value stands as it is."),
 });
 export const previewRevisionInput = z.strictObject({
   valueId,
