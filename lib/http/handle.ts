@@ -114,7 +114,7 @@ export function assertOwnOrigin(request: Request): void {
     throw new Forbidden("A change must come from this site's own pages.");
 }
 
-async function bodyWithin(request: Request, limit_bytes: number): Promise<string> {
+export async function bodyWithin(request: Request, limit_bytes: number): Promise<string> {
   const tooLarge = () => new Invalid(`The request is larger than ${limit_bytes} bytes.`, {}, 413);
   if (Number(request.headers.get("content-length") ?? 0) > limit_bytes) throw tooLarge();
   const reader = request.body?.getReader();
@@ -134,7 +134,7 @@ async function bodyWithin(request: Request, limit_bytes: number): Promise<string
   return Buffer.concat(parts).toString("utf8");
 }
 
-function parsedBody(request: Request, text: string): Record<string, unknown> {
+export function parsedBody(request: Request, text: string): Record<string, unknown> {
   if (text === "") return {};
   if (!/^application\/json\b/i.test(request.headers.get("content-type") ?? ""))
     throw new Invalid("A change is sent as application/json.", {}, 415);
@@ -158,7 +158,7 @@ function seenRevision(request: Request): number {
 }
 
 /** `[value]` arrives as `valueId`; a segment that is no uuid names nothing. Other segments keep their name. */
-function pathIds(params: Params): { projectId: Context["projectId"]; ids: Record<string, string> } {
+export function pathIds(params: Params): { projectId: Context["projectId"]; ids: Record<string, string> } {
   const ids: Record<string, string> = {};
   for (const [name, value] of Object.entries(params)) {
     if (typeof value !== "string") continue;
@@ -170,7 +170,7 @@ function pathIds(params: Params): { projectId: Context["projectId"]; ids: Record
   return { projectId: (projectId ?? "") as Context["projectId"], ids: rest };
 }
 
-function answer(body: unknown, status: number, requestId: string): Response {
+export function answer(body: unknown, status: number, requestId: string): Response {
   const headers: Record<string, string> = { "cache-control": "private, no-store", "x-request-id": requestId };
   if (body instanceof Response) {
     for (const [name, value] of Object.entries(headers)) body.headers.set(name, value);

@@ -1,24 +1,44 @@
-import { verify } from "@node-rs/argon2";
 import { eq } from "drizzle-orm";
 import { client } from "@/db/client";
 import * as t from "@/db/schema";
+import { normalEmail } from "@/lib/contracts/email-address";
 import { SignedOut } from "../errors";
+import { isPassword } from "./passwords";
 import type { SignedIn } from "./session-holder";
+import { siteEvent } from "./site-event";
+import { attemptSucceeded, beginAttempt } from "./throttle";
 
-/** A hash of nothing anybody knows: verified against when the account does not exist, so that both take as long. */
-const NOBODY =
-  "$argon2id$v=19$m=19456,t=2,p=1$c29tZXNhbHRzb21lc2FsdA$Zk1p0kVnWl3y8sVwC6nT6mXo2cJ0yq2eYd6m1m3b3kE";
+/** What a new session's cookie holds. */
+export type NewSession = SignedIn & { sessionVersion: number; sessionId: string };
 
-/** Checks e-mail and password; the answer to a wrong one does not tell which of the two was wrong. */
+/**
+ * Checks e-mail and password and opens a session. A wrong password, an absent account, a shut one and an address that
+ * is none get the same answer after the same work. Refuses with `Throttled` as `throttle.ts` says.
+ */
 export async function signIn(given: {
   email: string;
   password: string;
   address: string;
-}): Promise<SignedIn & { sessionVersion: number }> {
-  const email = given.email.trim().toLowerCase().normalize("NFKC");
-  const [found] = await client().database.select().from(t.person).where(eq(t.person.email, email));
-  const good = await verify(found?.passwordHash ?? NOBODY, given.password).catch(() => false);
-  if (!found || !good || found.disabledAt) throw new SignedOut("E-mail or password is not right.");
+  requestId: string;
+}): Promise<NewSession> {
+  const email = normalEmail(given.email);
+  const attempt = await beginAttempt(email ?? "not an address", given.address);
+  const [found] = await client()
+    .database.select()
+    .from(t.person)
+    .where(eq(t.person.email, email ?? ""));
+  const right = await isPassword(found?.passwordHash, given.password.slice(0, 200));
+  if (!found || !right || found.disabledAt) throw new SignedOut("E-mail or password is not right.");
+
+  await attemptSucceeded(attempt);
   const { id, name, siteAdministrator, sessionVersion } = found;
-  return { id, name, email: found.email, siteAdministrator, sessionVersion };
+  const sessionId = await client().database.transaction(async (tx) => {
+    const [session] = await tx
+      .insert(t.personSession)
+      .values({ personId: id, address: given.address })
+      .returning({ id: t.personSession.id });
+    await siteEvent(tx, given, { verb: "account:sign-in", personId: id });
+    return session?.id ?? "";
+  });
+  return { id, name, email: found.email, siteAdministrator, sessionVersion, sessionId };
 }

@@ -1,7 +1,2 @@
-import NextAuth from "next-auth";
-import { authOptions } from "@/lib/http/session";
-
-const handler = (request: Request, context: { params: Promise<{ nextauth: string[] }> }) =>
-  NextAuth(request as never, context as never, authOptions());
-
-export { handler as GET, handler as POST };
+/** Sign-in, sign-out and the session, through next-auth. */
+export { authGet as GET, authPost as POST } from "@/lib/http/auth-route";
