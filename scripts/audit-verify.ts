@@ -5,7 +5,10 @@
 import { closeClient } from "@/db/client";
 import { inEachProject, verifyProject } from "@/lib/services/record/audit-chain";
 
-const results = await inEachProject(async (tx, project) => ({ project, ...(await verifyProject(tx, project.id)) }));
+const results = await inEachProject(async (tx, project) => ({
+  project,
+  ...(await verifyProject(tx, project.id)),
+}));
 await closeClient();
 for (const { project, end, broken } of results)
   console.log(
