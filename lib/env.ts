@@ -26,6 +26,11 @@ export const variables = {
     .min(32, "must be at least 32 characters long")
     .describe("Key that sessions are sealed with"),
   APP_ORIGIN: httpUrl.describe("Address that people open, for links and origin checks"),
+  TRUSTED_PROXIES: z
+    .string()
+    .regex(/^[0-9a-fA-F:., ]+$/, "must be addresses, with commas between them")
+    .optional()
+    .describe("Addresses of the proxies in front, whose X-Forwarded-For is believed; none when left out"),
   HOLDGROUND_FAULTS: text.optional().describe("Test runs only: opens the named fault points"),
 };
 

@@ -1,4 +1,5 @@
-const LOCAL = /^[a-z0-9!#$%&'*+/=?^_`{|}~-]+(\.[a-z0-9!#$%&'*+/=?^_`{|}~-]+)*$/;
+// Without the signs by which old mail servers route a message on: ! % / | and their like.
+const LOCAL = /^[a-z0-9#$&'*+=?^_~-]+(\.[a-z0-9#$&'*+=?^_~-]+)*$/;
 const DOMAIN = /^([a-z0-9]([a-z0-9-]{0,61}[a-z0-9])?\.)+[a-z][a-z0-9-]{0,61}[a-z0-9]$/;
 
 /**
