@@ -10,15 +10,16 @@ export async function ensureMailSink(name) {
     await end(name);
     record = undefined;
   }
+  const started = !record;
   if (!record) {
     const port = await freePort(51_025, 2);
     record = { port, pagePort: port + 1 };
     const script = join(import.meta.dirname, "mail-sink.mjs");
     const args = [script, folder, String(record.port), String(record.pagePort)];
-    const started = startDetached(name, process.execPath, args, { facts: record });
+    const sink = startDetached(name, process.execPath, args, { facts: record });
     try {
       await until(() => answers(record.pagePort), {
-        ended: started.ended,
+        ended: sink.ended,
         complaint: `The mail sink did not start; see .local/log/${name}.log.`,
       });
     } catch (error) {
@@ -26,7 +27,12 @@ export async function ensureMailSink(name) {
       throw error;
     }
   }
-  return { url: `smtp://127.0.0.1:${record.port}`, page: `http://127.0.0.1:${record.pagePort}/`, folder };
+  return {
+    url: `smtp://127.0.0.1:${record.port}`,
+    page: `http://127.0.0.1:${record.pagePort}/`,
+    folder,
+    started,
+  };
 }
 
 async function answers(port) {

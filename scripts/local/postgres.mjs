@@ -35,13 +35,15 @@ export async function ensurePostgres() {
   if (!programs)
     throw new Error("PostgreSQL is not installed; run `npm start` as root, or: apt-get install postgresql");
   const passwords = { postgres: secret("postgres"), owner: secret("owner"), app: secret("app") };
-  if (!(await isOurs(passwords.postgres))) {
+  const started = !(await isOurs(passwords.postgres));
+  if (started) {
     if (!existsSync(join(data(), "PG_VERSION"))) makeCluster(programs, passwords.postgres);
     await startCluster(programs, passwords.postgres);
   }
   await ensureRoles(passwords);
   const at = `127.0.0.1:${recordedPort()}`;
   return {
+    started,
     superuser: `postgresql://postgres:${passwords.postgres}@${at}`,
     owner: `postgresql://holdground_owner:${passwords.owner}@${at}`,
     app: `postgresql://holdground_app:${passwords.app}@${at}`,

@@ -1,38 +1,48 @@
 import { readLocal, secret, writeLocal } from "./folders.mjs";
+import { givenEnvironment } from "./given.mjs";
 import { oneAtATime } from "./lock.mjs";
 import { ensureMailSink } from "./mail.mjs";
-import { ensureDatabase, ensurePostgres } from "./postgres.mjs";
-import { freePort } from "./processes.mjs";
+import { ensureDatabase, ensurePostgres, stopPostgres } from "./postgres.mjs";
+import { end, freePort } from "./processes.mjs";
 import { ensureBucket, ensureStore } from "./store.mjs";
 
+/** What each use of a checkout has of its own. Both share the private database server. */
+const uses = {
+  demo: { database: "holdground", store: "s3", bucket: "holdground", mail: "mail" },
+  // Test runs make their own databases, as many as they need.
+  test: { database: undefined, store: "s3-test", bucket: "holdground-test", mail: "mail-test" },
+};
+
 /**
- * Sees that database, store and mail are there for one use of this checkout ("demo" or "test") and answers with the
- * environment the application needs, and with what was made newly. What the environment already names (DATABASE_URL
- * with DATABASE_OWNER_URL, S3_*, SMTP_URL) is used as it is: nothing local is started for that part.
+ * Sees that database, store and mail are there for one use of this checkout ("demo" or "test"). Answers with the
+ * environment that the application needs and with the names of what had to be started. What the environment names
+ * itself (DATABASE_URL with DATABASE_OWNER_URL, S3_*, SMTP_URL) is used as it is: nothing is started for that part.
  */
-export async function ensureServices(use, { given = process.env, origin } = {}) {
+export async function ensureServices(use, { given = givenEnvironment(), origin, step = quietly } = {}) {
   return oneAtATime("services", async () => {
-    const made = [];
+    const started = [];
     const env = {
-      ...(await databaseEnv(use, given, made)),
-      ...(await storeEnv(use, given, origin, made)),
-      ...(await mailEnv(use, given)),
+      ...(await step("Database", () => databaseEnv(use, given, started))),
+      ...(await step("Store", () => storeEnv(use, given, origin, started))),
+      ...(await step("Mail", () => mailEnv(use, given, started))),
       MAIL_FROM: given.MAIL_FROM ?? "Holdground <register@holdground.example>",
       NEXTAUTH_SECRET: given.NEXTAUTH_SECRET ?? secret("nextauth"),
     };
-    return { env, made };
+    return { env, started };
   });
 }
 
-/** Which parts the given environment names itself. Half a part is refused: it would be filled by guessing. */
-export function externalParts(given = process.env) {
+const quietly = (_title, act) => act();
+
+/** Which parts the environment names itself. Half a part is refused: the other half would be a guess. */
+export function externalParts(given) {
   const store = ["S3_ENDPOINT", "S3_REGION", "S3_ACCESS_KEY", "S3_SECRET_KEY", "S3_BUCKET"];
   const missing = store.filter((name) => !given[name]);
   if (given.S3_ENDPOINT && missing.length > 0)
     throw new Error(`S3_ENDPOINT is set, so ${missing.join(", ")} must be set too.`);
   if (given.DATABASE_URL && !given.DATABASE_OWNER_URL)
     throw new Error(
-      "DATABASE_URL is set, so DATABASE_OWNER_URL must be set too: the migrations need the tables' owner.",
+      "DATABASE_URL is set, so DATABASE_OWNER_URL must be set too: only the owner of the tables may migrate them.",
     );
   return {
     database: Boolean(given.DATABASE_URL),
@@ -41,7 +51,7 @@ export function externalParts(given = process.env) {
   };
 }
 
-async function databaseEnv(use, given, made) {
+async function databaseEnv(use, given, started) {
   if (externalParts(given).database)
     return {
       DATABASE_URL: given.DATABASE_URL,
@@ -49,9 +59,9 @@ async function databaseEnv(use, given, made) {
       DATABASE_ADMIN_URL: given.DATABASE_OWNER_URL,
     };
   const server = await ensurePostgres();
-  // Test runs make their own databases, as many as they need; the demonstration has one.
-  const name = use === "demo" ? "holdground" : "postgres";
-  if (use === "demo" && (await ensureDatabase(server.superuser, name))) made.push("database");
+  if (server.started) started.push("postgres");
+  const name = uses[use].database ?? "postgres";
+  if (uses[use].database) await ensureDatabase(server.superuser, name);
   return {
     DATABASE_URL: `${server.app}/${name}`,
     DATABASE_OWNER_URL: `${server.owner}/${name}`,
@@ -59,19 +69,21 @@ async function databaseEnv(use, given, made) {
   };
 }
 
-async function storeEnv(use, given, origin, made) {
-  const external = externalParts(given).store;
-  const bucket = use === "demo" ? "holdground" : "holdground-test";
-  const store = external
-    ? {
-        endpoint: given.S3_ENDPOINT,
-        region: given.S3_REGION,
-        accessKey: given.S3_ACCESS_KEY,
-        secretKey: given.S3_SECRET_KEY,
-        bucket: use === "demo" ? given.S3_BUCKET : `${given.S3_BUCKET}-test`,
-      }
-    : await ensureStore({ name: use === "demo" ? "s3" : "s3-test", bucket, origin });
-  if (external ? await ensureBucket(store) : store.made) made.push("bucket");
+async function storeEnv(use, given, origin, started) {
+  let store;
+  if (externalParts(given).store) {
+    store = {
+      endpoint: given.S3_ENDPOINT,
+      region: given.S3_REGION,
+      accessKey: given.S3_ACCESS_KEY,
+      secretKey: given.S3_SECRET_KEY,
+      bucket: use === "demo" ? given.S3_BUCKET : `${given.S3_BUCKET}-test`,
+    };
+    await ensureBucket(store);
+  } else {
+    store = await ensureStore({ name: uses[use].store, bucket: uses[use].bucket, origin });
+    if (store.started) started.push(uses[use].store);
+  }
   return {
     S3_ENDPOINT: store.endpoint,
     S3_REGION: store.region,
@@ -81,18 +93,32 @@ async function storeEnv(use, given, origin, made) {
   };
 }
 
-async function mailEnv(use, given) {
-  if (externalParts(given).mail) return { SMTP_URL: given.SMTP_URL };
-  const sink = await ensureMailSink(use === "demo" ? "mail" : "mail-test");
+async function mailEnv(use, given, started) {
+  // Tests write to people who do not exist: their mail never goes to a real server.
+  if (use === "demo" && externalParts(given).mail) return { SMTP_URL: given.SMTP_URL };
+  const sink = await ensureMailSink(uses[use].mail);
+  if (sink.started) started.push(uses[use].mail);
   return { SMTP_URL: sink.url, MAIL_SINK_URL: sink.page };
 }
 
-/** The address the application is served at: the port it had last time, or else the first free one from PORT or 3000. */
-export async function chooseOrigin(use, given = process.env) {
-  const name = `${use}-port.json`;
-  const first = use === "demo" ? Number(given.PORT ?? 3000) : 3400;
-  const last = readLocal(name)?.port;
-  const port = await freePort(given.PORT && use === "demo" ? first : (last ?? first));
-  if (port !== last) writeLocal(name, { port });
+/** Ends the services of these names, if they are ours and run. Answers with those that were ended. */
+export async function endServices(names) {
+  const ended = [];
+  for (const name of names) if (name === "postgres" ? stopPostgres() : await end(name)) ended.push(name);
+  return ended;
+}
+
+/** Every service that any use may have started, the database last: others write to it until they end. */
+export const serviceNames = [...Object.values(uses).flatMap(({ store, mail }) => [store, mail]), "postgres"];
+
+const firstPort = { demo: 3000, dev: 3100, test: 3400 };
+
+/** The address to serve at: the port it had last time if that is free, or else the first free one from the usual. */
+export async function chooseOrigin(use, given = givenEnvironment()) {
+  const file = `${use}-port.json`;
+  const wanted = use !== "test" && given.PORT ? Number(given.PORT) : undefined;
+  const last = readLocal(file)?.port;
+  const port = await freePort(wanted ?? last ?? firstPort[use]);
+  if (port !== last) writeLocal(file, { port });
   return { port, origin: `http://127.0.0.1:${port}` };
 }

@@ -19,19 +19,20 @@ export async function ensureStore({ name, bucket, origin }) {
   if (!storeIsInstalled())
     throw new Error("The store is not installed; run `npm start` as root, or: apt-get install python3-swift");
   const keys = { accessKey: "holdground:app", secretKey: secret(name) };
-  let record = running(name);
-  if (record && origin && record.origin !== origin) {
-    await end(name);
-    record = undefined;
-  }
-  if (!record || !(await answers(record.port))) record = await startStore(name, keys, origin, record);
+  const before = running(name);
+  const origins = before?.origins ?? [];
+  const admitted = !origin || origins.includes(origin);
+  const there = before && admitted && (await answers(before.port));
+  // Pages of another address (npm run dev beside npm start) are let in as well; the last few are remembered.
+  const wanted = admitted ? origins : [origin, ...origins].slice(0, 4);
+  const record = there ? before : await startStore(name, keys, wanted);
   const store = { endpoint: `http://127.0.0.1:${record.port}`, region, bucket, ...keys };
-  const made = await ensureBucket(store);
-  return { ...store, made };
+  await ensureBucket(store);
+  return { ...store, started: !there };
 }
 
-async function startStore(name, keys, origin = "http://127.0.0.1:3000", hung) {
-  if (hung) await end(name);
+async function startStore(name, keys, origins) {
+  await end(name);
   const folder = join(stateFolder(), name);
   mkdirSync(folder, { recursive: true, mode: 0o700 });
   const port = await freePort(49_320, 4);
@@ -42,10 +43,10 @@ async function startStore(name, keys, origin = "http://127.0.0.1:3000", hung) {
     HOLDGROUND_S3_PORT: String(port),
     HOLDGROUND_S3_ACCESS_KEY: keys.accessKey,
     HOLDGROUND_S3_SECRET_KEY: keys.secretKey,
-    HOLDGROUND_S3_ORIGINS: origin,
+    HOLDGROUND_S3_ORIGINS: origins.join(",") || "http://127.0.0.1:3000",
   };
   const script = join(import.meta.dirname, "s3.py");
-  const started = startDetached(name, python, ["-I", script], { env, facts: { port, origin } });
+  const started = startDetached(name, python, ["-I", script], { env, facts: { port, origins } });
   try {
     await until(() => answers(port), {
       ended: started.ended,
@@ -55,7 +56,7 @@ async function startStore(name, keys, origin = "http://127.0.0.1:3000", hung) {
     forget(name);
     throw error;
   }
-  return { port, origin };
+  return { port };
 }
 
 async function answers(port) {

@@ -1,0 +1,1 @@
+export function givenEnvironment(): Record<string, string>;
