@@ -2,10 +2,13 @@ import { z } from "zod";
 import type { ChangeId, ConsequenceId, FootingId, PersonId, ValueId } from "./ids";
 import { plainText } from "./plain-text";
 
-const uuid = <Brand extends string>() => z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
+const uuid = <Brand extends string>() =>
+  z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
 
 const changeId = uuid<ChangeId>();
-const reason = plainText(4000).trim().min(10, "Say why in a sentence: it is kept for ever and read by others.");
+const reason = plainText(4000)
+  .trim()
+  .min(10, "Say why in a sentence: it is kept for ever and read by others.");
 
 export const outcomes = ["now fails", "still fails", "outside conditions", "recovers", "holds"] as const;
 export type OutcomeName = (typeof outcomes)[number];
@@ -83,7 +86,12 @@ export type ConsequenceItem = {
   open: boolean;
   answer: { kind: AnswerKind; reason: string; name: string; at: string; verdict: string | null } | null;
 };
-export type ChangeDetail = { change: ChangeItem; items: ConsequenceItem[]; next: string | null; matching: number };
+export type ChangeDetail = {
+  change: ChangeItem;
+  items: ConsequenceItem[];
+  next: string | null;
+  matching: number;
+};
 
 /** What a draft would do to the footings linked to its value. Nothing of it is written. */
 export type RevisionPreview = {

@@ -11,7 +11,8 @@ import type {
 import { plainText } from "./plain-text";
 import type { ValueFieldName } from "./value-words";
 
-const uuid = <Brand extends string>() => z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
+const uuid = <Brand extends string>() =>
+  z.guid("This is not an id.").transform((text) => text.toLowerCase() as Brand);
 
 /** A quantity as typed: kept word for word in the draft, read with its unit when the draft is checked. */
 const typed = z.union([plainText(60), z.number()], "A number, or a number with its unit.").nullable();
@@ -22,7 +23,11 @@ const choice = <const Words extends readonly [string, ...string[]]>(...words: Wo
 /** One piece of evidence: a page of one revision of a document, and the holes that it speaks of. */
 export const draftSource = z.strictObject({
   documentRevisionId: uuid<DocumentRevisionId>(),
-  page: z.int("A whole page number.").min(1, "Pages begin at 1.").max(100_000, "No report has so many pages.").nullable(),
+  page: z
+    .int("A whole page number.")
+    .min(1, "Pages begin at 1.")
+    .max(100_000, "No report has so many pages.")
+    .nullable(),
   clause: plainText(200),
   note: plainText(1000),
   holes: z.array(plainText(60)).max(200, "At most 200 holes."),
@@ -86,7 +91,10 @@ export const createValueInput = z.strictObject({
   reference: z
     .string()
     .trim()
-    .regex(/^[A-Za-z0-9][A-Za-z0-9 ./_-]{0,39}$/, "1 to 40 letters, digits, spaces or . / _ -, beginning with one of the first two.")
+    .regex(
+      /^[A-Za-z0-9][A-Za-z0-9 ./_-]{0,39}$/,
+      "1 to 40 letters, digits, spaces or . / _ -, beginning with one of the first two.",
+    )
     .optional(),
 });
 export const listValuesInput = z.strictObject({
@@ -109,7 +117,9 @@ export const withdrawRevisionInput = z.strictObject({
   valueId,
   revisionId: uuid<ValueRevisionId>(),
   revision,
-  reason: plainText(4000).trim().min(10, "Say why in a sentence: it is read by everyone who relies on the value."),
+  reason: plainText(4000)
+    .trim()
+    .min(10, "Say why in a sentence: it is read by everyone who relies on the value."),
 });
 export const confirmSourceInput = z.strictObject({
   valueId,
@@ -120,7 +130,11 @@ export const confirmSourceInput = z.strictObject({
 export const previewRevisionInput = z.strictObject({
   valueId,
   /** A pressure to try instead of the draft's own, in kPa net. */
-  netAllowable_kPa: z.coerce.number("A pressure in kPa.").positive("A pressure above zero.").max(1e6).optional(),
+  netAllowable_kPa: z.coerce
+    .number("A pressure in kPa.")
+    .positive("A pressure above zero.")
+    .max(1e6)
+    .optional(),
 });
 
 export type CreateValueInput = z.input<typeof createValueInput>;

@@ -11,7 +11,12 @@ import { countsInWords, noCounts } from "./outcome";
 export type TallyByOwner = Map<PersonId | "", OutcomeCounts>;
 
 /** Adds one footing to its owner's tally. */
-export function tally(byOwner: TallyByOwner, ownerId: PersonId | null, outcome: keyof OutcomeCounts, count = 1): void {
+export function tally(
+  byOwner: TallyByOwner,
+  ownerId: PersonId | null,
+  outcome: keyof OutcomeCounts,
+  count = 1,
+): void {
   const key = ownerId ?? "";
   const counts = byOwner.get(key) ?? noCounts();
   counts[outcome] += count;
@@ -33,7 +38,13 @@ export async function announceChange(
   change: { id: ChangeId; title: string; reason: string; byOwner: TallyByOwner },
 ): Promise<number> {
   const owners = [...change.byOwner.keys()].filter((key): key is PersonId => key !== "");
-  const people = await tx.execute<{ id: PersonId; email: string; name: string; leads: boolean; project: string }>(sql`
+  const people = await tx.execute<{
+    id: PersonId;
+    email: string;
+    name: string;
+    leads: boolean;
+    project: string;
+  }>(sql`
     select p.id, p.email, p.name, bool_or(m.role = 'lead') as leads, j.number || ' ' || j.title as project
     from person p
     join membership m on m.person_id = p.id and m.project_id = ${context.projectId}

@@ -66,9 +66,11 @@ async function answer(tx: Transaction, context: Context, given: Answer): Promise
     ${lastAnswer}
     where q.project_id = ${context.projectId} and q.change_id = ${changeId} and q.id = any(${sql.param(ids)}::uuid[])
     order by f.mark`);
-  if (rows.rows.length < ids.length) throw new NotFound("One of these footings is not among those of this change.");
+  if (rows.rows.length < ids.length)
+    throw new NotFound("One of these footings is not among those of this change.");
   const answered = rows.rows.filter((row) => row.answered).map(({ mark }) => mark);
-  if (answered.length > 0) throw new Conflict(`Answered already: ${answered.slice(0, 20).join(", ")}.`, { marks: answered });
+  if (answered.length > 0)
+    throw new Conflict(`Answered already: ${answered.slice(0, 20).join(", ")}.`, { marks: answered });
   await tx.execute(sql`
     insert into disposition (project_id, consequence_id, number, kind, reason, answered_by)
     select ${context.projectId}, q.id, q.number, ${kind}, ${reason}, ${context.person.id}
@@ -78,7 +80,11 @@ async function answer(tx: Transaction, context: Context, given: Answer): Promise
 }
 
 /** One hand at a time answers or closes a change; a closed one takes no more answers. */
-export async function lockChange(tx: Transaction, context: Context, changeId: ChangeId): Promise<{ title: string }> {
+export async function lockChange(
+  tx: Transaction,
+  context: Context,
+  changeId: ChangeId,
+): Promise<{ title: string }> {
   await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`change ${changeId}`}, 0))`);
   const rows = await tx.execute<{ title: string; closer: string | null }>(sql`
     select h.title, p.name as closer from change h
@@ -91,7 +97,13 @@ export async function lockChange(tx: Transaction, context: Context, changeId: Ch
   return change;
 }
 
-async function askGeotechnical(tx: Transaction, context: Context, changeId: ChangeId, marks: string[], question: string) {
+async function askGeotechnical(
+  tx: Transaction,
+  context: Context,
+  changeId: ChangeId,
+  marks: string[],
+  question: string,
+) {
   const people = await tx.execute<{ id: PersonId; email: string; name: string }>(sql`
     select p.id, p.email, p.name from person p join membership m on m.person_id = p.id
     where m.project_id = ${context.projectId} and m.role = 'geotechnical' and p.disabled_at is null order by p.id`);
@@ -103,7 +115,11 @@ async function askGeotechnical(tx: Transaction, context: Context, changeId: Chan
       key: `referred/${changeId}/${context.requestId}/${person.id}`,
       recipientId: person.id,
       recipient: person.email,
-      subject: `${marks.length === 1 ? `Footing ${marks[0]} is` : `${marks.length} footings are`} referred back`.slice(0, 250),
+      subject:
+        `${marks.length === 1 ? `Footing ${marks[0]} is` : `${marks.length} footings are`} referred back`.slice(
+          0,
+          250,
+        ),
       body: [
         `${person.name},`,
         "",

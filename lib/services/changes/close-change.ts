@@ -24,7 +24,11 @@ export async function closeChange(context: Context, given: CloseChangeInput) {
     await tx
       .insert(t.changeClosure)
       .values({ projectId: context.projectId, changeId, note, closedBy: context.person.id });
-    await audit(tx, context, { verb: "change:close", subject: `change/${changeId}`, detail: { title, note } });
+    await audit(tx, context, {
+      verb: "change:close",
+      subject: `change/${changeId}`,
+      detail: { title, note },
+    });
     return { changeId };
   });
 }

@@ -1,6 +1,11 @@
 import { type SQL, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { type ChangeItem, type ChangeList, type ListChangesInput, listChangesInput } from "@/lib/contracts/changes";
+import {
+  type ChangeItem,
+  type ChangeList,
+  type ListChangesInput,
+  listChangesInput,
+} from "@/lib/contracts/changes";
 import { assertMay, type Context, inProject } from "../context";
 import { parse } from "../parse";
 import { isAnswered, lastAnswer } from "./answered";
@@ -25,7 +30,12 @@ export async function listChanges(context: Context, given: ListChangesInput): Pr
 }
 
 /** Changes `h` that a condition selects, newest first. */
-export async function selectChanges(tx: Transaction, context: Context, where: SQL, limit: number): Promise<ChangeItem[]> {
+export async function selectChanges(
+  tx: Transaction,
+  context: Context,
+  where: SQL,
+  limit: number,
+): Promise<ChangeItem[]> {
   const rows = await tx.execute<ChangeItem & { seq: string }>(sql`
     select h.id, h.seq, h.kind, h.title, h.reason, h.value_id as "valueId",
       json_build_object('id', m.id, 'name', m.name) as "madeBy", h.made_at as "madeAt", h.counts,

@@ -30,6 +30,8 @@ export function countsInWords(counts: OutcomeCounts): string {
     [counts.recovers, "recovers", "recover"],
     [counts.holds, "holds", "hold"],
   ] as const;
-  const said = parts.filter(([count]) => count > 0).map(([count, one, many]) => `${count} ${count === 1 ? one : many}`);
+  const said = parts
+    .filter(([count]) => count > 0)
+    .map(([count, one, many]) => `${count} ${count === 1 ? one : many}`);
   return said.length === 0 ? "no linked footing" : said.join(", ");
 }

@@ -1,5 +1,10 @@
 import { type SQL, sql } from "drizzle-orm";
-import { type ChangeDetail, type ConsequenceItem, type ReadChangeInput, readChangeInput } from "@/lib/contracts/changes";
+import {
+  type ChangeDetail,
+  type ConsequenceItem,
+  type ReadChangeInput,
+  readChangeInput,
+} from "@/lib/contracts/changes";
 import { assertMay, type Context, inProject } from "../context";
 import { Invalid, NotFound } from "../errors";
 import { parse } from "../parse";
@@ -55,6 +60,7 @@ export async function readChange(context: Context, given: ReadChangeInput): Prom
 
 function cursorOf(text: string): { rank: number; mark: string } {
   const read = /^([1-5])\.(.+)$/s.exec(text);
-  if (!read?.[1] || !read[2]) throw new Invalid("One field needs another look.", { after: "This is not the end of a page." });
+  if (!read?.[1] || !read[2])
+    throw new Invalid("One field needs another look.", { after: "This is not the end of a page." });
   return { rank: Number(read[1]), mark: read[2] };
 }

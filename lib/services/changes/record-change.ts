@@ -58,7 +58,10 @@ export async function recordChange(
 export async function insertChange(
   tx: Transaction,
   context: Context,
-  row: Omit<typeof t.change.$inferInsert, "projectId" | "madeBy" | "seq"> & { id: ChangeId; counts: OutcomeCounts },
+  row: Omit<typeof t.change.$inferInsert, "projectId" | "madeBy" | "seq"> & {
+    id: ChangeId;
+    counts: OutcomeCounts;
+  },
 ): Promise<void> {
   const { id, kind, subjectId, title, reason, valueId, fromRevisionId, toRevisionId, counts } = row;
   await tx.insert(t.change).values({

@@ -31,7 +31,8 @@ export async function confirmSource(
       join bearing_value_revision r on r.project_id = n.project_id and r.id = ${revisionId} and r.value_id = ${valueId}
       where n.project_id = ${context.projectId} and n.id = ${documentRevisionId}`);
     const seen = rows.rows[0];
-    if (!seen?.cited) throw new NotFound("This revision does not rest on an earlier revision of that document.");
+    if (!seen?.cited)
+      throw new NotFound("This revision does not rest on an earlier revision of that document.");
     if (!seen.current) throw new Conflict("That document has a newer revision still. Look at that one.");
     if (seen.before) throw new Conflict("This source has been confirmed already.");
     await tx.insert(t.sourceConfirmation).values({

@@ -12,7 +12,15 @@ import { assertMay, type Context, inProject } from "../context";
 import { Conflict, Forbidden } from "../errors";
 import { faultPoint } from "../faults";
 import { assertSeen, parse } from "../parse";
-import { type LockedValue, lockValue, nameOf, pressureOf, type RevisionSeen, seeRevisions, when } from "./lock-revision";
+import {
+  type LockedValue,
+  lockValue,
+  nameOf,
+  pressureOf,
+  type RevisionSeen,
+  seeRevisions,
+  when,
+} from "./lock-revision";
 
 /**
  * Issues a checked revision and records, in the same transaction, what it does to every linked footing: pointer,
@@ -26,7 +34,10 @@ export async function issueRevision(context: Context, given: IssueRevisionInput)
     const value = await lockValue(tx, context, valueId);
     const { wanted, inForce } = await seeRevisions(tx, context, value, revisionId);
     assertIssuable(context, value, wanted);
-    assertSeen(revision, value.revision, value.reference, { revision: value.revision, inForce: inForce?.code ?? null });
+    assertSeen(revision, value.revision, value.reference, {
+      revision: value.revision,
+      inForce: inForce?.code ?? null,
+    });
 
     const next = await moveCurrentTo(tx, context, value, wanted);
     const changeId = randomUUID() as ChangeId;
@@ -51,7 +62,14 @@ export async function issueRevision(context: Context, given: IssueRevisionInput)
     await audit(tx, context, {
       verb: "revision:issue",
       subject: `value/${valueId}`,
-      detail: { revisionId, code: wanted.code, from: inForce?.code ?? null, reason: wanted.reason, changeId, counts },
+      detail: {
+        revisionId,
+        code: wanted.code,
+        from: inForce?.code ?? null,
+        reason: wanted.reason,
+        changeId,
+        counts,
+      },
     });
     await faultPoint("issue:audit");
     return { valueId, revisionId, code: wanted.code, changeId, counts, revision: next };
@@ -61,18 +79,33 @@ export async function issueRevision(context: Context, given: IssueRevisionInput)
 function assertIssuable(context: Context, value: LockedValue, wanted: RevisionSeen): void {
   const { code } = wanted;
   if (wanted.issuer && wanted.issuedAt)
-    throw new Conflict(`${value.reference} ${code} was issued by ${wanted.issuer} at ${when(wanted.issuedAt)}.`, {
-      issuedBy: wanted.issuer,
-      issuedAt: new Date(wanted.issuedAt).toISOString(),
+    throw new Conflict(
+      `${value.reference} ${code} was issued by ${wanted.issuer} at ${when(wanted.issuedAt)}.`,
+      {
+        issuedBy: wanted.issuer,
+        issuedAt: new Date(wanted.issuedAt).toISOString(),
+      },
+    );
+  if (wanted.later)
+    throw new Conflict(`${wanted.later} came after ${code}. Issue that one, or revise again.`, {
+      later: wanted.later,
     });
-  if (wanted.later) throw new Conflict(`${wanted.later} came after ${code}. Issue that one, or revise again.`, { later: wanted.later });
   if (wanted.preparedBy === context.person.id)
-    throw new Forbidden(`You prepared ${code}. It is issued by a third person, after ${wanted.checker} has checked it.`);
+    throw new Forbidden(
+      `You prepared ${code}. It is issued by a third person, after ${wanted.checker} has checked it.`,
+    );
   if (wanted.checkedBy === context.person.id)
-    throw new Forbidden(`You checked ${code}. It is issued by a third person, neither ${wanted.preparer} nor you.`);
+    throw new Forbidden(
+      `You checked ${code}. It is issued by a third person, neither ${wanted.preparer} nor you.`,
+    );
 }
 
-async function moveCurrentTo(tx: Transaction, context: Context, value: LockedValue, wanted: RevisionSeen): Promise<number> {
+async function moveCurrentTo(
+  tx: Transaction,
+  context: Context,
+  value: LockedValue,
+  wanted: RevisionSeen,
+): Promise<number> {
   await tx.insert(t.revisionIssue).values({
     projectId: context.projectId,
     valueRevisionId: wanted.id,

@@ -21,9 +21,14 @@ export async function withdrawRevision(context: Context, given: WithdrawRevision
   return inProject(context, async (tx) => {
     const value = await lockValue(tx, context, valueId);
     const { wanted, inForce } = await seeRevisions(tx, context, value, revisionId);
-    if (wanted.withdrawer) throw new Conflict(`${wanted.code} was withdrawn by ${wanted.withdrawer} already.`);
-    if (inForce?.id !== wanted.id) throw new Conflict(`${wanted.code} is not in force; there is nothing to withdraw.`);
-    assertSeen(revision, value.revision, value.reference, { revision: value.revision, inForce: inForce.code });
+    if (wanted.withdrawer)
+      throw new Conflict(`${wanted.code} was withdrawn by ${wanted.withdrawer} already.`);
+    if (inForce?.id !== wanted.id)
+      throw new Conflict(`${wanted.code} is not in force; there is nothing to withdraw.`);
+    assertSeen(revision, value.revision, value.reference, {
+      revision: value.revision,
+      inForce: inForce.code,
+    });
 
     await tx.insert(t.revisionWithdrawal).values({
       projectId: context.projectId,

@@ -2,7 +2,12 @@ import { and, eq, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import * as t from "@/db/schema";
 import type { ValueId, ValueRevisionId } from "@/lib/contracts/ids";
-import { type CheckDraftInput, checkDraftInput, type DraftContent, type StatedFields } from "@/lib/contracts/values";
+import {
+  type CheckDraftInput,
+  checkDraftInput,
+  type DraftContent,
+  type StatedFields,
+} from "@/lib/contracts/values";
 import { audit } from "../audit";
 import { assertMay, type Context, inProject } from "../context";
 import { Conflict, Forbidden, Invalid, NotFound } from "../errors";
@@ -27,7 +32,9 @@ export async function checkDraft(context: Context, given: CheckDraftInput) {
     if (!draft) throw new NotFound("No draft of this value waits for a check.");
     assertSeen(revision, draft.revision, "The draft", { content: draft.kept.fields });
     if (draft.preparedBy === context.person.id || draft.kept.editors.includes(context.person.id))
-      throw new Forbidden("You prepared this draft. Its check is another person's, so that two have looked at it.");
+      throw new Forbidden(
+        "You prepared this draft. Its check is another person's, so that two have looked at it.",
+      );
     const { fields, reading } = await readComplete(tx, context, valueId, draft.kept.fields, confirmed);
 
     const revised = await insertRevision(tx, context, { valueId, draft, fields, reading });
@@ -36,7 +43,9 @@ export async function checkDraft(context: Context, given: CheckDraftInput) {
     await faultPoint("check:sources");
     await tx
       .delete(t.bearingValueDraft)
-      .where(and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)));
+      .where(
+        and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)),
+      );
     const next = value.revision + 1;
     await tx
       .update(t.bearingValue)
@@ -47,7 +56,13 @@ export async function checkDraft(context: Context, given: CheckDraftInput) {
       subject: `value/${valueId}`,
       detail: { ...revised, reference: value.reference, confirmed, reason: reading.reason },
     });
-    return { valueId, revisionId: revised.id, code: revised.code, contentHash: revised.contentHash, revision: next };
+    return {
+      valueId,
+      revisionId: revised.id,
+      code: revised.code,
+      contentHash: revised.contentHash,
+      revision: next,
+    };
   });
 }
 
@@ -69,7 +84,10 @@ async function readComplete(
   if (ids.some((id) => !cited.has(id))) problems.sources = "A source is not a document of this project.";
   const count = Object.keys(problems).length;
   if (count > 0 || !reading.fields)
-    throw new Invalid(count === 1 ? "One field needs another look." : `${count} fields need another look.`, problems);
+    throw new Invalid(
+      count === 1 ? "One field needs another look." : `${count} fields need another look.`,
+      problems,
+    );
   const superseded = supersededSources(
     ids.flatMap((id) => {
       const source = cited.get(id);
@@ -78,7 +96,9 @@ async function readComplete(
   );
   const open = [...reading.findings, ...superseded].filter(({ code }) => !confirmed.includes(code));
   if (open.length > 0)
-    throw new Conflict("Some of this is unusual. Confirm each point, or send the draft back.", { findings: open });
+    throw new Conflict("Some of this is unusual. Confirm each point, or send the draft back.", {
+      findings: open,
+    });
   return { fields: reading.fields, reading };
 }
 
@@ -96,7 +116,15 @@ async function insertRevision(
   const { number, ordinal } = so.rows[0] ?? { number: 1, ordinal: 1 };
   const code = `${letter}${String(ordinal).padStart(2, "0")}`;
   const { reasonCode, reason } = reading;
-  const signed = { valueId, number, code, fields, sources: draft.kept.fields.sources ?? [], reasonCode, reason };
+  const signed = {
+    valueId,
+    number,
+    code,
+    fields,
+    sources: draft.kept.fields.sources ?? [],
+    reasonCode,
+    reason,
+  };
   const [row] = await tx
     .insert(t.bearingValueRevision)
     .values({
@@ -126,7 +154,14 @@ async function insertSources(
 ): Promise<void> {
   const sources = content.sources ?? [];
   if (sources.length === 0) return;
-  await tx.insert(t.valueSource).values(
-    sources.map((source, at) => ({ ...source, projectId: context.projectId, valueRevisionId, ordinal: at + 1 })),
-  );
+  await tx
+    .insert(t.valueSource)
+    .values(
+      sources.map((source, at) => ({
+        ...source,
+        projectId: context.projectId,
+        valueRevisionId,
+        ordinal: at + 1,
+      })),
+    );
 }

@@ -13,8 +13,17 @@ export async function createValue(context: Context, given: CreateValueInput) {
 
   return inProject(context, async (tx) => {
     // References are numbered by one hand at a time, so that two new entries never ask for the same number.
-    await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`references ${context.projectId}`}, 0))`);
-    const found = await tx.execute<{ zone: boolean; unit: boolean; carried: boolean; taken: string | null; same: boolean; next: string }>(sql`
+    await tx.execute(
+      sql`select pg_advisory_xact_lock(hashtextextended(${`references ${context.projectId}`}, 0))`,
+    );
+    const found = await tx.execute<{
+      zone: boolean;
+      unit: boolean;
+      carried: boolean;
+      taken: string | null;
+      same: boolean;
+      next: string;
+    }>(sql`
       select exists (select from zone where project_id = ${context.projectId} and id = ${zoneId}) as zone,
         exists (select from ground_unit where project_id = ${context.projectId} and id = ${groundUnitId}) as unit,
         exists (select from zone_ground_unit where project_id = ${context.projectId} and zone_id = ${zoneId}
@@ -25,25 +34,42 @@ export async function createValue(context: Context, given: CreateValueInput) {
         'BV-' || lpad((1 + coalesce(max(substring(reference from '^BV-(\\d{1,6})$')::int), 0))::text, 2, '0') as next
       from bearing_value where project_id = ${context.projectId}`);
     const seen = found.rows[0];
-    if (!seen?.zone) throw new Invalid("One field needs another look.", { zoneId: "There is no such zone in this project." });
+    if (!seen?.zone)
+      throw new Invalid("One field needs another look.", {
+        zoneId: "There is no such zone in this project.",
+      });
     if (!seen.unit)
-      throw new Invalid("One field needs another look.", { groundUnitId: "There is no such ground unit in this project." });
+      throw new Invalid("One field needs another look.", {
+        groundUnitId: "There is no such ground unit in this project.",
+      });
     if (!seen.carried)
       throw new Invalid("One field needs another look.", {
-        groundUnitId: "This zone does not carry that ground unit. Add the unit to the zone first, or choose another.",
+        groundUnitId:
+          "This zone does not carry that ground unit. Add the unit to the zone first, or choose another.",
       });
     if (seen.taken)
-      throw new Conflict(`${seen.taken} already is the value of this ground unit in this zone. Revise that one.`, {
-        reference: seen.taken,
-      });
+      throw new Conflict(
+        `${seen.taken} already is the value of this ground unit in this zone. Revise that one.`,
+        {
+          reference: seen.taken,
+        },
+      );
     if (seen.same) throw new Conflict(`Another value already goes by the reference ${reference}.`);
 
     const [row] = await tx
       .insert(t.bearingValue)
       .values({ projectId: context.projectId, zoneId, groundUnitId, reference: reference ?? seen.next })
-      .returning({ id: t.bearingValue.id, reference: t.bearingValue.reference, revision: t.bearingValue.revision });
+      .returning({
+        id: t.bearingValue.id,
+        reference: t.bearingValue.reference,
+        revision: t.bearingValue.revision,
+      });
     if (!row) throw new Error("An inserted value was not returned.");
-    await audit(tx, context, { verb: "value:create", subject: `value/${row.id}`, detail: { ...row, zoneId, groundUnitId } });
+    await audit(tx, context, {
+      verb: "value:create",
+      subject: `value/${row.id}`,
+      detail: { ...row, zoneId, groundUnitId },
+    });
     return row;
   });
 }

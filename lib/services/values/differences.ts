@@ -21,7 +21,8 @@ export function differences(before: Stated, after: Stated): FieldDifference[] {
     });
   }
   const [was, is] = [cited(before.sources), cited(after.sources)];
-  if (was !== is) found.push({ name: "sources", label: "Sources", unit: "", before: was, after: is, change_percent: null });
+  if (was !== is)
+    found.push({ name: "sources", label: "Sources", unit: "", before: was, after: is, change_percent: null });
   return found;
 }
 
@@ -29,7 +30,9 @@ export function differences(before: Stated, after: Stated): FieldDifference[] {
 export function shown(name: ValueFieldName, value: string | number | null): string {
   if (value === null || value === "") return "not stated";
   if (typeof value === "number") return String(Number(value.toPrecision(6)));
-  const words: Record<string, string> | undefined = (valueWords as Record<string, Record<string, string>>)[name];
+  const words: Record<string, string> | undefined = (valueWords as Record<string, Record<string, string>>)[
+    name
+  ];
   return words?.[value] ?? value;
 }
 

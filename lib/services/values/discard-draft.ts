@@ -18,7 +18,9 @@ export async function discardDraft(context: Context, given: { valueId: string; r
     assertSeen(revision, draft.revision, "The draft", { content: draft.kept.fields });
     await tx
       .delete(t.bearingValueDraft)
-      .where(and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)));
+      .where(
+        and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)),
+      );
     await audit(tx, context, {
       verb: "value:draft",
       subject: `value/${valueId}`,

@@ -1,7 +1,7 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import type { DraftContent } from "@/lib/contracts/values";
 import type { PersonId, ValueId } from "@/lib/contracts/ids";
+import type { DraftContent } from "@/lib/contracts/values";
 import type { Context } from "../context";
 import { NotFound } from "../errors";
 

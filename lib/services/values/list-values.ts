@@ -1,5 +1,10 @@
 import { sql } from "drizzle-orm";
-import { type ListValuesInput, listValuesInput, type ValueItem, type ValueList } from "@/lib/contracts/values";
+import {
+  type ListValuesInput,
+  listValuesInput,
+  type ValueItem,
+  type ValueList,
+} from "@/lib/contracts/values";
 import { assertMay, type Context, inProject } from "../context";
 import { parse } from "../parse";
 
@@ -18,7 +23,8 @@ export async function listValues(context: Context, given: ListValuesInput): Prom
       sql`strpos(lower(concat_ws(' ', reference, zone->>'name', "groundUnit"->>'code', "groundUnit"->>'name')),
         ${search.trim().toLowerCase()}) > 0`,
   ].filter((condition) => condition !== undefined && condition !== "");
-  const where = conditions.length === 0 ? sql`true` : sql.join(conditions as ReturnType<typeof sql>[], sql` and `);
+  const where =
+    conditions.length === 0 ? sql`true` : sql.join(conditions as ReturnType<typeof sql>[], sql` and `);
 
   return inProject(context, async (tx) => {
     const rows = await tx.execute<ValueItem & { total: number }>(sql`

@@ -7,7 +7,8 @@ const gravels = "BS 8004:1986 table 1, presumed values of loose to dense gravel 
 const sands = "BS 8004:1986 table 1, presumed values of loose to compact sand (secondary copy)";
 const clays = "BS 8004:1986 table 1, presumed values of soft to hard clay (secondary copy)";
 const poor = "common practice: such ground carries a footing only after its own investigation";
-const rocks = "IBC table 1806.2 (192 kPa) to BS 8004:1986 table 1, sound strong rock (10,000 kPa, from memory)";
+const rocks =
+  "IBC table 1806.2 (192 kPa) to BS 8004:1986 table 1, sound strong rock (10,000 kPa, from memory)";
 
 // Where the table leaves a band open at one end, half the lowest or twice the highest figure printed is taken.
 const bands: Record<string, Band> = {
@@ -16,8 +17,18 @@ const bands: Record<string, Band> = {
   sand: { words: "sand", low_kPa: 50, high_kPa: 600, source: sands },
   gravel: { words: "gravel", low_kPa: 100, high_kPa: 1200, source: gravels },
   cobbles: { words: "cobbles", low_kPa: 100, high_kPa: 1200, source: gravels },
-  peat: { words: "peat", low_kPa: Number.POSITIVE_INFINITY, high_kPa: Number.POSITIVE_INFINITY, source: poor },
-  topsoil: { words: "topsoil", low_kPa: Number.POSITIVE_INFINITY, high_kPa: Number.POSITIVE_INFINITY, source: poor },
+  peat: {
+    words: "peat",
+    low_kPa: Number.POSITIVE_INFINITY,
+    high_kPa: Number.POSITIVE_INFINITY,
+    source: poor,
+  },
+  topsoil: {
+    words: "topsoil",
+    low_kPa: Number.POSITIVE_INFINITY,
+    high_kPa: Number.POSITIVE_INFINITY,
+    source: poor,
+  },
   "made-ground": {
     words: "made ground",
     low_kPa: Number.POSITIVE_INFINITY,

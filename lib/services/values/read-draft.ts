@@ -1,6 +1,6 @@
 import type { DraftContent, DraftFinding, StatedFields } from "@/lib/contracts/values";
-import { plainNumber, pressure_kPa, type Read } from "./typed-quantity";
 import { askIfPlausible } from "./plausible";
+import { plainNumber, pressure_kPa, type Read } from "./typed-quantity";
 
 export type DraftReading = {
   /** Complete and within bounds, or null while there are problems. */
@@ -24,12 +24,22 @@ type Problems = Record<string, string>;
 export function readDraft(draft: DraftContent, ground: { soil: string; today: string }): DraftReading {
   const problems: Problems = {};
   const findings: DraftFinding[] = [];
-  const choose = <Word>(name: keyof DraftContent, chosen: Word | null | undefined, sentence: string): Word | null => {
+  const choose = <Word>(
+    name: keyof DraftContent,
+    chosen: Word | null | undefined,
+    sentence: string,
+  ): Word | null => {
     if (chosen === null || chosen === undefined) problems[name] = sentence;
     return chosen ?? null;
   };
   const amount = (name: keyof DraftContent & `${string}`, bounds: Bounds, missing?: string): number | null =>
-    take(problems, name, plainNumber(draft[name] as string | number | null | undefined, bounds.unit), bounds, missing);
+    take(
+      problems,
+      name,
+      plainNumber(draft[name] as string | number | null | undefined, bounds.unit),
+      bounds,
+      missing,
+    );
 
   const pressure = readPressure(draft, problems);
   const choices = readChoices(choose, draft);
@@ -45,7 +55,9 @@ export function readDraft(draft: DraftContent, ground: { soil: string; today: st
   const settlementLimit_mm = amount(
     "settlementLimit_mm",
     { least: 0, most: 500, open: true, unit: "mm" },
-    draft.governedBy === "settlement" ? "A value governed by settlement states the settlement it allows." : undefined,
+    draft.governedBy === "settlement"
+      ? "A value governed by settlement states the settlement it allows."
+      : undefined,
   );
   const settlementPredicted_mm = amount("settlementPredicted_mm", { least: 0, most: 500, unit: "mm" });
   const confirmation = readBasis(draft, problems);
@@ -92,7 +104,9 @@ function take(problems: Problems, name: string, read: Read, bounds: Bounds, miss
   const { least, most, open, unit } = bounds;
   if (read.amount < least || read.amount > most || (open && read.amount === least)) {
     const from = open ? `above ${least}` : `from ${least}`;
-    problems[name] = `${from} to ${most}${unit && ` ${unit}`} is possible here.`.replace(/^./, (c) => c.toUpperCase());
+    problems[name] = `${from} to ${most}${unit && ` ${unit}`} is possible here.`.replace(/^./, (c) =>
+      c.toUpperCase(),
+    );
     return null;
   }
   return read.amount;
@@ -100,10 +114,17 @@ function take(problems: Problems, name: string, read: Read, bounds: Bounds, miss
 
 function readPressure(draft: DraftContent, problems: Problems) {
   const bounds = { least: 0, most: 100_000, open: true, unit: "kPa" };
-  const given_kPa = take(problems, "given", pressure_kPa(draft.given), bounds, "Give the pressure as the report has it.");
+  const given_kPa = take(
+    problems,
+    "given",
+    pressure_kPa(draft.given),
+    bounds,
+    "Give the pressure as the report has it.",
+  );
   const given = typeof draft.given === "number" ? `${draft.given} kPa` : (draft.given ?? "").trim();
   if (!draft.givenBasis)
-    problems.givenBasis = "Net or gross: state which weights are included. If the report does not say, ask its author.";
+    problems.givenBasis =
+      "Net or gross: state which weights are included. If the report does not say, ask its author.";
   if (draft.givenBasis !== "gross") {
     return { given, given_kPa, overburden_kPa: null, net_kPa: draft.givenBasis === "net" ? given_kPa : null };
   }
@@ -114,7 +135,8 @@ function readPressure(draft: DraftContent, problems: Problems) {
     { least: 0, most: 5000, unit: "kPa" },
     "A gross figure needs the overburden at founding level that it includes.",
   );
-  if (given_kPa === null || overburden_kPa === null) return { given, given_kPa, overburden_kPa, net_kPa: null };
+  if (given_kPa === null || overburden_kPa === null)
+    return { given, given_kPa, overburden_kPa, net_kPa: null };
   // Under either factor convention the allowable gross exceeds the allowable net by the overburden (allowable-bearing).
   const net_kPa = given_kPa - overburden_kPa;
   if (net_kPa <= 0) {
@@ -135,9 +157,21 @@ function readChoices(
       draft.factorConvention,
       "Say whether the factor was put on the net or the gross ultimate, or that the report does not say.",
     ),
-    comparedWith: choose("comparedWith", draft.comparedWith, "Say which pressure of the footing it is compared with."),
-    loadBasis: choose("loadBasis", draft.loadBasis, "Say which loads it goes with: working or factored. They never mix."),
-    governedBy: choose("governedBy", draft.governedBy, "Say whether strength or settlement governs, or that it is not stated."),
+    comparedWith: choose(
+      "comparedWith",
+      draft.comparedWith,
+      "Say which pressure of the footing it is compared with.",
+    ),
+    loadBasis: choose(
+      "loadBasis",
+      draft.loadBasis,
+      "Say which loads it goes with: working or factored. They never mix.",
+    ),
+    governedBy: choose(
+      "governedBy",
+      draft.governedBy,
+      "Say whether strength or settlement governs, or that it is not stated.",
+    ),
     drainage: choose("drainage", draft.drainage, "Say whether the value is for drained or undrained ground."),
     basis: choose("basis", draft.basis, "Say where the value comes from."),
     purpose: choose("purpose", draft.purpose, "Say whether it is preliminary or good for design."),
@@ -154,7 +188,8 @@ function readTransient(
     problems.transientIncrease = "Yes or no: does the report grant an increase for short-term loads?";
     return { transientIncrease: null, transientFactor: null, accidentalFactor: null };
   }
-  if (draft.transientIncrease === "none") return { transientIncrease: "none", transientFactor: 1, accidentalFactor: 1 };
+  if (draft.transientIncrease === "none")
+    return { transientIncrease: "none", transientFactor: 1, accidentalFactor: 1 };
   if (draft.loadBasis === "characteristic-reduced")
     problems.transientIncrease = "Loads that are already reduced cannot have the increase as well.";
   const bounds = { least: 1, most: 2, unit: "" };
@@ -213,7 +248,8 @@ function readRanges(
 function readBasis(draft: DraftContent, problems: Problems) {
   if (draft.basis === "recommended" && (draft.sources ?? []).length === 0)
     problems.sources = "A recommended value rests on at least one page of a report.";
-  if (draft.basis !== "assumed" && draft.basis !== "presumptive") return { confirmBy: null, confirmWho: null };
+  if (draft.basis !== "assumed" && draft.basis !== "presumptive")
+    return { confirmBy: null, confirmWho: null };
   const confirmBy = (draft.confirmBy ?? "").trim();
   const confirmWho = (draft.confirmWho ?? "").trim();
   if (!isDate(confirmBy)) problems.confirmBy = "Give the day by which it is to be confirmed, as 2026-03-31.";
@@ -226,14 +262,28 @@ function readBasis(draft: DraftContent, problems: Problems) {
 function isDate(text: string): boolean {
   if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
   const [year = 0, month = 0, day = 0] = text.split("-").map(Number);
-  const days = [31, (year % 4 === 0 && year % 100 !== 0) || year % 400 === 0 ? 29 : 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31];
+  const days = [
+    31,
+    (year % 4 === 0 && year % 100 !== 0) || year % 400 === 0 ? 29 : 28,
+    31,
+    30,
+    31,
+    30,
+    31,
+    31,
+    30,
+    31,
+    30,
+    31,
+  ];
   return year >= 1900 && month >= 1 && day >= 1 && day <= (days[month - 1] ?? 0);
 }
 
 function readTexts(draft: DraftContent, problems: Problems) {
   const groundwaterBasis = (draft.groundwaterBasis ?? "").trim();
   if (groundwaterBasis === "")
-    problems.groundwaterBasis = "Say what the groundwater level rests on, or that none was met and down to what depth.";
+    problems.groundwaterBasis =
+      "Say what the groundwater level rests on, or that none was met and down to what depth.";
   const reason = (draft.reason ?? "").trim();
   if (reason.length < 10) problems.reason = "Say in a sentence why this revision is made.";
   return {
@@ -257,14 +307,16 @@ function askAround(
     findings.push({
       code: "allowable-with-factored-loads",
       field: "loadBasis",
-      sentence: "An allowable pressure goes with working loads, a design resistance with factored ones. Is this one a resistance?",
+      sentence:
+        "An allowable pressure goes with working loads, a design resistance with factored ones. Is this one a resistance?",
       source: "common practice; EN 1997-1 2.4.7 keeps the two apart",
     });
   if (draft.transientIncrease === "granted" && draft.governedBy === "settlement")
     findings.push({
       code: "increase-on-settlement",
       field: "transientIncrease",
-      sentence: "A value limited by settlement is seldom raised for short-term loads. Does the report say so?",
+      sentence:
+        "A value limited by settlement is seldom raised for short-term loads. Does the report say so?",
       source: "common practice",
     });
   if (confirmBy && isDate(confirmBy) && confirmBy < ground.today)

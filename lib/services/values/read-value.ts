@@ -1,6 +1,13 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import type { DocumentRevisionId, GroundUnitId, PersonId, ValueId, ValueRevisionId, ZoneId } from "@/lib/contracts/ids";
+import type {
+  DocumentRevisionId,
+  GroundUnitId,
+  PersonId,
+  ValueId,
+  ValueRevisionId,
+  ZoneId,
+} from "@/lib/contracts/ids";
 import {
   type CitedSource,
   type RevisionState,
@@ -93,7 +100,11 @@ async function readDraftOf(
 async function citeDraft(tx: Transaction, context: Context, kept: DraftKept): Promise<CitedSource[]> {
   const sources = kept.fields.sources ?? [];
   if (sources.length === 0) return [];
-  const cited = await citeSources(tx, context, sources.map(({ documentRevisionId }) => documentRevisionId));
+  const cited = await citeSources(
+    tx,
+    context,
+    sources.map(({ documentRevisionId }) => documentRevisionId),
+  );
   return sources.flatMap((source) => {
     const of = cited.get(source.documentRevisionId);
     return of ? [{ ...of, ...source, confirmed: false }] : [];
@@ -115,7 +126,8 @@ type RevisionRow = StatedFields & {
   sources: (Omit<CitedSource, "documentRevisionId"> & { documentRevisionId: DocumentRevisionId })[];
 };
 
-const signature = (person: string, at: string) => sql.raw(`
+const signature = (person: string, at: string) =>
+  sql.raw(`
   case when ${person}.id is not null then json_build_object('personId', ${person}.id, 'name', ${person}.name,
     'qualification', ${person}.qualification, 'at', ${at}) end`);
 
@@ -193,5 +205,19 @@ function statedRevision(row: RevisionRow): Omit<ValueRevision, "differences"> {
   const fields = Object.fromEntries(fieldNames.map((name) => [name, row[name]])) as unknown as StatedFields;
   const { id, number, code, state, sources, reasonCode, reason, contentHash } = row;
   const { prepared, checked, issued, withdrawn } = row;
-  return { id, number, code, state, fields, sources, reasonCode, reason, contentHash, prepared, checked, issued, withdrawn };
+  return {
+    id,
+    number,
+    code,
+    state,
+    fields,
+    sources,
+    reasonCode,
+    reason,
+    contentHash,
+    prepared,
+    checked,
+    issued,
+    withdrawn,
+  };
 }

@@ -14,7 +14,8 @@ export async function saveDraft(context: Context, given: SaveDraftInput) {
 
   return inProject(context, async (tx) => {
     const { draft } = await lockValueAndDraft(tx, context, valueId);
-    if (!draft) throw new NotFound("No draft of this value is being written; it may have been checked meanwhile.");
+    if (!draft)
+      throw new NotFound("No draft of this value is being written; it may have been checked meanwhile.");
     assertSeen(revision, draft.revision, "The draft", { content: draft.kept.fields });
     const editors = [...new Set([...draft.kept.editors, context.person.id])];
     const kept: DraftKept = { fields: content, editors };
@@ -22,7 +23,9 @@ export async function saveDraft(context: Context, given: SaveDraftInput) {
     await tx
       .update(t.bearingValueDraft)
       .set({ content: kept, preparedBy: context.person.id, revision: next, changedAt: sql`now()` })
-      .where(and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)));
+      .where(
+        and(eq(t.bearingValueDraft.projectId, context.projectId), eq(t.bearingValueDraft.valueId, valueId)),
+      );
     await audit(tx, context, {
       verb: "value:draft",
       subject: `value/${valueId}`,
@@ -34,5 +37,7 @@ export async function saveDraft(context: Context, given: SaveDraftInput) {
 
 function changedFields(before: DraftContent, after: DraftContent): string[] {
   const names = new Set([...Object.keys(before), ...Object.keys(after)]) as Set<keyof DraftContent>;
-  return [...names].filter((name) => JSON.stringify(before[name] ?? null) !== JSON.stringify(after[name] ?? null)).sort();
+  return [...names]
+    .filter((name) => JSON.stringify(before[name] ?? null) !== JSON.stringify(after[name] ?? null))
+    .sort();
 }

@@ -4,7 +4,10 @@ import type { DocumentId, DocumentRevisionId } from "@/lib/contracts/ids";
 import type { CitedSource, DraftFinding } from "@/lib/contracts/values";
 import type { Context } from "../context";
 
-type Citation = Pick<CitedSource, "documentRevisionId" | "documentId" | "reference" | "title" | "code" | "supersededBy">;
+type Citation = Pick<
+  CitedSource,
+  "documentRevisionId" | "documentId" | "reference" | "title" | "code" | "supersededBy"
+>;
 
 /** How document revisions of this project are cited; those that it does not hold are missing from the answer. */
 export async function citeSources(

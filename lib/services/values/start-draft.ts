@@ -19,7 +19,10 @@ export async function startDraft(context: Context, given: { valueId: string }) {
   return inProject(context, async (tx) => {
     const { draft } = await lockValueAndDraft(tx, context, valueId);
     if (draft) throw new Conflict("A draft of this value is being written already. Go on with that one.");
-    const of = and(eq(t.bearingValueRevision.projectId, context.projectId), eq(t.bearingValueRevision.valueId, valueId));
+    const of = and(
+      eq(t.bearingValueRevision.projectId, context.projectId),
+      eq(t.bearingValueRevision.valueId, valueId),
+    );
     const [last] = await tx
       .select()
       .from(t.bearingValueRevision)
@@ -30,7 +33,9 @@ export async function startDraft(context: Context, given: { valueId: string }) {
       ? await tx
           .select()
           .from(t.valueSource)
-          .where(and(eq(t.valueSource.projectId, context.projectId), eq(t.valueSource.valueRevisionId, last.id)))
+          .where(
+            and(eq(t.valueSource.projectId, context.projectId), eq(t.valueSource.valueRevisionId, last.id)),
+          )
           .orderBy(t.valueSource.ordinal)
       : [];
     const kept: DraftKept = { fields: last ? contentOf(last, sources) : {}, editors: [context.person.id] };

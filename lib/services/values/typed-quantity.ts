@@ -12,10 +12,16 @@ export function plainNumber(typed: string | number | null | undefined, unit: str
   if (text === "") return { amount: null };
   const bare = unit !== "" && endsInUnit(text, unit) ? text.slice(0, -unit.length).trim() : text;
   if (DECIMAL.test(bare)) return { amount: Number(bare) };
-  if (/^[+-]?\d+,\d+$/.test(bare)) return { problem: `Write the decimal with a point: ${bare.replace(",", ".")}.` };
+  if (/^[+-]?\d+,\d+$/.test(bare))
+    return { problem: `Write the decimal with a point: ${bare.replace(",", ".")}.` };
   return { problem: unit === "" ? "Give a number, as 3 or 2.5." : `Give a number in ${unit}, as 2.5.` };
 }
 
 const plain = (unit: string): string => unit.toLowerCase().replace("³", "3").replace("²", "2");
 
 const endsInUnit = (text: string, unit: string): boolean => plain(text).endsWith(plain(unit));
+
+// replaced when lib/units arrives
+export function pressure_kPa(typed: string | number | null | undefined): Read {
+  return plainNumber(typed, "kPa");
+}
