@@ -20,11 +20,18 @@ export default defineConfig({
           include: ["tests/**/*.test.{ts,tsx}"],
           exclude: [...withServices, ...browserTests, ...componentTests],
           testTimeout: 30_000,
+          sequence: { groupOrder: 0 },
         },
       },
       {
         extends: true,
-        test: { name: "components", include: componentTests, environment: "jsdom", testTimeout: 20_000 },
+        test: {
+          name: "components",
+          include: componentTests,
+          environment: "jsdom",
+          testTimeout: 20_000,
+          sequence: { groupOrder: 1 },
+        },
       },
       {
         extends: true,
@@ -35,6 +42,7 @@ export default defineConfig({
           setupFiles: "tests/support/environment.ts",
           testTimeout: 60_000,
           hookTimeout: 120_000,
+          sequence: { groupOrder: 2 },
         },
       },
       {
@@ -44,7 +52,9 @@ export default defineConfig({
           include: browserTests,
           globalSetup: "tests/support/browser-setup.ts",
           setupFiles: "tests/support/environment.ts",
+          // One browser at a time, after everything else: what it waits for must not wait for other tests.
           fileParallelism: false,
+          sequence: { groupOrder: 3 },
           testTimeout: 120_000,
           hookTimeout: 120_000,
         },

@@ -98,7 +98,7 @@ export async function ensureBucket(store) {
   }
 }
 
-/** Removes every object of the bucket, every version of it too. */
+/** Removes every object of the bucket; answers with how many there were. */
 export async function emptyBucket(store) {
   const client = await minioClient(store);
   if (!(await client.bucketExists(store.bucket))) return 0;
