@@ -1,9 +1,9 @@
 import { sql } from "drizzle-orm";
-import { createTransport, type Transporter } from "nodemailer";
+import { createTransport } from "nodemailer";
 import { env } from "@/lib/env";
 import { enter, throughDoor } from "@/lib/services/context";
 import type { ProjectId } from "@/lib/contracts/ids";
-import { letterOf, type Waiting } from "./letter";
+import { type Letter, letterOf, type Waiting } from "./letter";
 
 /** A claimed letter that nobody reported on is taken up again after this: the relay that held it is gone. */
 const LEASE_S = 120;
@@ -11,22 +11,27 @@ const BATCH = 20;
 const LOOK_EVERY_MS = 1000;
 const GIVE_UP_AFTER_DAYS = 5;
 
+/** What the relay needs of a mail server. */
+export type MailServer = { sendMail: (letter: Letter) => Promise<unknown>; close: () => void };
 export type Sent = { sent: number; delayed: number; failed: number };
 
 /** Seconds until the next try: 5, 10, 20 … up to five minutes, so that mail leaves soon after the server is back. */
 export const backOff_s = (attempts: number): number => Math.min(5 * 2 ** Math.max(0, attempts - 1), 300);
 
 /** The mail server of the environment. Slow or silent ones are given up on, so that others' letters are not held up. */
-export function mailServer(url = env().SMTP_URL): Transporter {
-  return createTransport(url, {
-    pool: true,
+export function mailServer(url = env().SMTP_URL): MailServer {
+  return createTransport({
+    url,
+    pool: true as const,
     maxConnections: 4,
+    // When to try again is decided by the outbox alone.
+    maxRequeues: 0,
     connectionTimeout: 10_000,
     greetingTimeout: 10_000,
     socketTimeout: 30_000,
     disableFileAccess: true,
     disableUrlAccess: true,
-  } as never) as unknown as Transporter;
+  });
 }
 
 /**
@@ -34,7 +39,7 @@ export function mailServer(url = env().SMTP_URL): Transporter {
  * any transaction, then marked. A relay that dies in between leaves a letter that is sent again under the same
  * Message-ID: at least once, never lost. A refusal for good is recorded; anything else is tried again later.
  */
-export async function sendWaiting(server: Transporter, from = env().MAIL_FROM): Promise<Sent> {
+export async function sendWaiting(server: MailServer, from = env().MAIL_FROM): Promise<Sent> {
   const tally: Sent = { sent: 0, delayed: 0, failed: 0 };
   for (;;) {
     const claimed = await claim();
@@ -58,7 +63,7 @@ async function claim(): Promise<Waiting[]> {
   });
 }
 
-async function send(server: Transporter, row: Waiting, from: string): Promise<keyof Sent> {
+async function send(server: MailServer, row: Waiting, from: string): Promise<keyof Sent> {
   const letter = letterOf(row, from);
   if (!letter) return fail(row, "The address is not one that mail is sent to.");
   if (!(await mayStillRead(row))) return fail(row, "Not sent: the recipient has no access to the project any more.");
