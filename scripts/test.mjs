@@ -3,7 +3,7 @@ import { passes, standingChecks } from "./local/checks.mjs";
 import { checkNode } from "./local/packages.mjs";
 import { install, withPlace } from "./local/prepare.mjs";
 import { running } from "./local/processes.mjs";
-import { giveUp, step } from "./local/say.mjs";
+import { step } from "./local/say.mjs";
 import { endServices, ensureServices } from "./local/services.mjs";
 import { startTestServer } from "./local/test-server.mjs";
 import { conclude, runVitest } from "./local/vitest.mjs";
@@ -67,6 +67,7 @@ async function holds(title, act) {
 }
 
 await main().catch((error) => {
-  console.log("0 passed, 1 failed");
-  giveUp(error);
+  console.error(`\n${error.message}`);
+  conclude({ passed: 0, failed: 1, skipped: 0 });
+  process.exit();
 });

@@ -48,6 +48,7 @@ export const next = join(root, "node_modules", "next", "dist", "bin", "next");
 export const tsx = join(root, "node_modules", "tsx", "dist", "cli.mjs");
 
 export const quiet = {
+  NO_COLOR: "1",
   NEXT_TELEMETRY_DISABLED: "1",
   AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true",
 };

@@ -117,6 +117,7 @@ function makeCluster(programs, password) {
 }
 
 async function startCluster(programs, password) {
+  await untilLeft();
   const port = await freePort(recordedPort() ?? 55_432);
   asPostgres("tee", [portFile()], String(port));
   const log = join(home(), "server.log");
@@ -131,6 +132,17 @@ async function startCluster(programs, password) {
   await until(() => isOurs(password), {
     patience_ms: 15_000,
     complaint: `Another server answers on port ${port}, not the private database in ${data()}.`,
+  });
+}
+
+/** A server that was killed is seen for a while after its end, and its data folder counts as taken until then. */
+async function untilLeft() {
+  const file = join(data(), "postmaster.pid");
+  if (!existsSync(file)) return;
+  const pid = asText(file).split("\n")[0];
+  await until(() => !existsSync(`/proc/${pid}`) || !existsSync(file), {
+    patience_ms: 20_000,
+    complaint: `The private database (process ${pid}) neither answers nor ends; end it, then start again.`,
   });
 }
 
