@@ -8,7 +8,7 @@ const node = process.execPath;
 
 /** What is looked at without running the product: each is one check, and all are made even when one fails. */
 export const standingChecks = [
-  { title: "Format and lint", commands: [[bin("biome"), "ci", "--max-diagnostics=60", "."]] },
+  { title: "Format and lint", commands: [[bin("biome"), "ci", "--colors=off", "--max-diagnostics=60", "."]] },
   {
     title: "Types",
     commands: [

@@ -1,0 +1,2 @@
+export function faultsOf(path: string, source: string, resolve?: (path: string) => string): string[];
+export function checkImports(): string[];
