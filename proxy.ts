@@ -6,7 +6,8 @@ import { answerHeaders, contentSecurityPolicy } from "@/lib/http/answer-headers"
 const SESSION_COOKIE = "__Host-holdground.session";
 
 /** Pages that anybody may open, and what needs no session because it holds no data. */
-const PUBLIC = /^\/(sign-in|invitation|reset)(\/|$)|^\/(api|_next)\/|^\/[^/]+\.(svg|ico|png|webmanifest|txt)$/;
+const PUBLIC =
+  /^\/(sign-in|invitation|reset)(\/|$)|^\/(api|_next)\/|^\/[^/]+\.(svg|ico|png|webmanifest|txt)$/;
 
 /** Sends those without a session to sign in, and sets the headers of every answer. It opens nothing and guards nothing. */
 export function proxy(request: NextRequest): NextResponse {
@@ -28,7 +29,11 @@ export function proxy(request: NextRequest): NextResponse {
   for (const name of [...headers.keys()]) if (name.startsWith("x-middleware-")) headers.delete(name);
   headers.set("x-nonce", nonce);
   headers.set("content-security-policy", policy);
-  return withHeaders(NextResponse.next({ request: { headers } }), policy, !pathname.startsWith("/_next/static/"));
+  return withHeaders(
+    NextResponse.next({ request: { headers } }),
+    policy,
+    !pathname.startsWith("/_next/static/"),
+  );
 }
 
 function withHeaders(answer: NextResponse, policy: string, dynamic: boolean): NextResponse {

@@ -26,7 +26,10 @@ export const newPassword = z
   .min(PASSWORD_MIN, `At least ${PASSWORD_MIN} characters.`)
   .max(200, "At most 200 characters.")
   .refine((typed) => new Set(typed).size >= 5, "At least five different characters.")
-  .refine((typed) => !(COMMON.test(typed) && typed.length < 16), "This begins like the passwords that are tried first.");
+  .refine(
+    (typed) => !(COMMON.test(typed) && typed.length < 16),
+    "This begins like the passwords that are tried first.",
+  );
 
 const token = z.string("The link is not complete.").regex(/^[A-Za-z0-9_-]{43}$/, "The link is not complete.");
 
@@ -38,7 +41,10 @@ export const resetPasswordInput = z.strictObject({ token, password: newPassword 
 
 /** Changes the own password; every other session of this person ends. */
 export const changePasswordInput = z.strictObject({
-  currentPassword: z.string("The current password is needed.").min(1, "The current password is needed.").max(200),
+  currentPassword: z
+    .string("The current password is needed.")
+    .min(1, "The current password is needed.")
+    .max(200),
   password: newPassword,
 });
 
@@ -61,5 +67,11 @@ export const openAccountInput = z.strictObject({
 /** Finds people, for the site administrator. */
 export const findPeopleInput = z.strictObject({ search: plainText(120).default("") });
 
-export type Account = { id: string; name: string; email: string; qualification: string; siteAdministrator: boolean };
+export type Account = {
+  id: string;
+  name: string;
+  email: string;
+  qualification: string;
+  siteAdministrator: boolean;
+};
 export type PersonRow = Omit<Account, "qualification"> & { disabledAt: string | null };

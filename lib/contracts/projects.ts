@@ -6,7 +6,8 @@ const line = (what: string, limit: number) =>
   plainText(limit)
     .transform((typed) => typed.replace(/\s+/g, " ").trim())
     .refine((text) => text !== "", `${what} is needed.`);
-const optionalLine = (limit: number) => plainText(limit).transform((typed) => typed.replace(/\s+/g, " ").trim());
+const optionalLine = (limit: number) =>
+  plainText(limit).transform((typed) => typed.replace(/\s+/g, " ").trim());
 const number = (what: string, least: number, most: number) =>
   z
     .number(`${what} is a number.`)

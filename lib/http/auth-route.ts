@@ -38,7 +38,8 @@ export async function authPost(request: Request, route: Route): Promise<Response
     const cookies = cookiesOf(request);
     const origin = request.headers.get("origin");
     if (origin !== null) {
-      if (origin !== new URL(env().APP_ORIGIN).origin) throw new Forbidden("A change must come from this site's own pages.");
+      if (origin !== new URL(env().APP_ORIGIN).origin)
+        throw new Forbidden("A change must come from this site's own pages.");
       proveOwn(body, cookies);
     }
     const asked = { json: body.json === "true", callbackUrl: ownPath(body.callbackUrl, env().APP_ORIGIN) };
@@ -91,7 +92,8 @@ async function throughNextAuth(
       status = code;
       return answer;
     },
-    getHeader: (name: string) => (name.toLowerCase() === "set-cookie" ? headers.getSetCookie() : headers.get(name)),
+    getHeader: (name: string) =>
+      name.toLowerCase() === "set-cookie" ? headers.getSetCookie() : headers.get(name),
     setHeader: (name: string, value: string | string[]) => {
       headers.delete(name);
       for (const one of Array.isArray(value) ? value : [value]) headers.append(name, one);
@@ -145,7 +147,8 @@ function cookiesOf(request: Request): Record<string, string> {
 async function readBody(request: Request): Promise<Body> {
   const text = await bodyWithin(request, 20_000);
   const type = request.headers.get("content-type") ?? "";
-  if (/^application\/x-www-form-urlencoded\b/i.test(type)) return Object.fromEntries(new URLSearchParams(text));
+  if (/^application\/x-www-form-urlencoded\b/i.test(type))
+    return Object.fromEntries(new URLSearchParams(text));
   if (/^application\/json\b/i.test(type) || text === "") {
     let body: unknown;
     try {

@@ -15,7 +15,8 @@ export async function eventStream(context: Context): Promise<Response> {
   assertMay(context, "project:read");
   const { projectId, person } = context;
   const count = open.get(person.id) ?? 0;
-  if (count >= STREAMS_A_PERSON) throw new Throttled("Too many windows listen for changes. Please close some.", 60);
+  if (count >= STREAMS_A_PERSON)
+    throw new Throttled("Too many windows listen for changes. Please close some.", 60);
   open.set(person.id, count + 1);
   const stillSignedIn = await sessionWatch();
   const encoder = new TextEncoder();
@@ -24,7 +25,11 @@ export async function eventStream(context: Context): Promise<Response> {
     start(out) {
       const send = (text: string) => out.enqueue(encoder.encode(text));
       const tell = (heard: Heard) =>
-        send("changeId" in heard ? `event: change\ndata: ${JSON.stringify(heard)}\n\n` : "event: reread\ndata: {}\n\n");
+        send(
+          "changeId" in heard
+            ? `event: change\ndata: ${JSON.stringify(heard)}\n\n`
+            : "event: reread\ndata: {}\n\n",
+        );
       const stop = liveChanges().listen(projectId, tell);
       const timer = setInterval(async () => {
         // When the database does not answer nobody can say that access lasts: the stream ends and the browser asks again.

@@ -2,7 +2,15 @@ import { randomUUID } from "node:crypto";
 import type { z } from "zod";
 import { env } from "@/lib/env";
 import { AnsweredBefore, type Context, databaseCode, sha256 } from "@/lib/services/context";
-import { Forbidden, Invalid, NotFound, Refusal, RevisionMissing, SignedOut, Unavailable } from "@/lib/services/errors";
+import {
+  Forbidden,
+  Invalid,
+  NotFound,
+  Refusal,
+  RevisionMissing,
+  SignedOut,
+  Unavailable,
+} from "@/lib/services/errors";
 import { rolesInProject } from "@/lib/services/members/roles-in-project";
 import { problem } from "./problem";
 import { currentPerson } from "./session";
@@ -13,7 +21,9 @@ type Run = (context: Context, given: never) => Promise<unknown>;
 type Handler = (request: Request, route: RouteContext) => Promise<Response>;
 
 /** What the OpenAPI page and the tests read of a route: the schema it takes and how it answers. */
-export type Described = Handler & { described: { body?: z.ZodType; query?: z.ZodType; status: number; write: boolean } };
+export type Described = Handler & {
+  described: { body?: z.ZodType; query?: z.ZodType; status: number; write: boolean };
+};
 
 const UUID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i;
 const BODY_LIMIT_BYTES = 1_000_000;
@@ -51,7 +61,9 @@ export function write(options: {
       if (key !== null && !/^[\x21-\x7e]{8,128}$/.test(key))
         throw new Invalid("An Idempotency-Key has 8 to 128 printable characters.");
       const route = `${request.method} ${new URL(request.url).pathname}`;
-      const keyed = key ? { key, route, bodyHash: sha256(`${request.headers.get("if-match")}\n${text}`), status } : undefined;
+      const keyed = key
+        ? { key, route, bodyHash: sha256(`${request.headers.get("if-match")}\n${text}`), status }
+        : undefined;
       return answer(await options.run({ ...context, keyed }, given as never), status, context.requestId);
     },
     { body: options.body, status, write: true },
@@ -83,17 +95,30 @@ export function refusal(error: unknown, request: Request, requestId: string): Re
   const path = new URL(request.url).pathname;
   if (error instanceof AnsweredBefore) return answer(error.body, error.status, requestId);
   if (error instanceof Refusal) {
-    if ([401, 403, 404].includes(error.status)) log("refused", { requestId, method: request.method, path, code: error.code });
+    if ([401, 403, 404].includes(error.status))
+      log("refused", { requestId, method: request.method, path, code: error.code });
     return problem(error, requestId);
   }
   const code = databaseCode(error);
   if (code?.startsWith("08") || code === "ECONNREFUSED" || code === "57P01" || isConnectionLoss(error))
-    return problem(new Unavailable("The database does not answer just now. Nothing was changed; please try again."), requestId);
-  log("failed", { requestId, method: request.method, path, cause: String((error as Error)?.stack ?? error), code });
+    return problem(
+      new Unavailable("The database does not answer just now. Nothing was changed; please try again."),
+      requestId,
+    );
+  log("failed", {
+    requestId,
+    method: request.method,
+    path,
+    cause: String((error as Error)?.stack ?? error),
+    code,
+  });
   const body = { type: "about:blank", title: "failed", status: 500, code: "failed", requestId };
   return new Response(
     JSON.stringify({ ...body, detail: "Something went wrong on our side. Nothing was changed." }),
-    { status: 500, headers: { "content-type": "application/problem+json", "cache-control": "private, no-store" } },
+    {
+      status: 500,
+      headers: { "content-type": "application/problem+json", "cache-control": "private, no-store" },
+    },
   );
 }
 
@@ -151,7 +176,8 @@ export function parsedBody(request: Request, text: string): Record<string, unkno
 
 function seenRevision(request: Request): number {
   const tag = request.headers.get("if-match");
-  if (tag === null) throw new RevisionMissing("Say which revision you saw (If-Match), so that nobody's work is lost.");
+  if (tag === null)
+    throw new RevisionMissing("Say which revision you saw (If-Match), so that nobody's work is lost.");
   const seen = /^"(\d{1,9})"$/.exec(tag)?.[1];
   // A weak tag, a star or another form names no revision: it can match none.
   return seen === undefined ? -1 : Number(seen);

@@ -2,8 +2,8 @@ import { randomUUID } from "node:crypto";
 import { notFound, redirect } from "next/navigation";
 import { cache } from "react";
 import type { ProjectId } from "@/lib/contracts/ids";
-import type { Context } from "@/lib/services/context";
 import type { SignedIn } from "@/lib/services/accounts/session-holder";
+import type { Context } from "@/lib/services/context";
 import { rolesInProject } from "@/lib/services/members/roles-in-project";
 import { currentPerson } from "./session";
 

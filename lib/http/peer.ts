@@ -12,7 +12,10 @@ const plain = (address: string) => address.replace(/^::ffff:(?=\d+\.)/, "");
  * operator trusts it is the last entry that this proxy added to X-Forwarded-For. Headers by which a client could pass
  * for the proxy or for the framework itself are removed.
  */
-export function cleanRequest(request: Pick<IncomingMessage, "headers" | "socket">, trusted: readonly string[]): void {
+export function cleanRequest(
+  request: Pick<IncomingMessage, "headers" | "socket">,
+  trusted: readonly string[],
+): void {
   const { headers } = request;
   const socket = plain(request.socket.remoteAddress ?? "");
   const behindProxy = trusted.includes(socket);
@@ -22,8 +25,10 @@ export function cleanRequest(request: Pick<IncomingMessage, "headers" | "socket"
     ?.trim();
   const peer = behindProxy && forwarded && isIP(plain(forwarded)) ? plain(forwarded) : socket;
   for (const name of Object.keys(headers)) {
-    if (name === PEER_HEADER || name.startsWith("x-middleware-") || name === "x-real-ip") delete headers[name];
-    if (name.startsWith("x-forwarded-") && !(behindProxy && name !== "x-forwarded-host")) delete headers[name];
+    if (name === PEER_HEADER || name.startsWith("x-middleware-") || name === "x-real-ip")
+      delete headers[name];
+    if (name.startsWith("x-forwarded-") && !(behindProxy && name !== "x-forwarded-host"))
+      delete headers[name];
   }
   headers[PEER_HEADER] = peer || "unknown";
 }

@@ -1,13 +1,13 @@
+import { cookies } from "next/headers";
 import type { NextAuthOptions, Session } from "next-auth";
 import { decode } from "next-auth/jwt";
 import CredentialsProvider from "next-auth/providers/credentials";
-import { cookies } from "next/headers";
 import { cache } from "react";
+import type { PersonId } from "@/lib/contracts/ids";
 import { env } from "@/lib/env";
 import { endSession } from "@/lib/services/accounts/end-sessions";
 import { ABSOLUTE_SECONDS, type SignedIn, sessionHolder } from "@/lib/services/accounts/session-holder";
 import { type NewSession, signIn } from "@/lib/services/accounts/sign-in";
-import type { PersonId } from "@/lib/contracts/ids";
 import { ownPath } from "./own-address";
 import { PEER_HEADER } from "./peer";
 
@@ -20,7 +20,8 @@ type Held = { personId: string; sessionVersion: number; sessionId: string };
 
 const heldIn = (token: Record<string, unknown> | null | undefined): Held | null => {
   const { personId, sessionVersion, sessionId } = token ?? {};
-  if (typeof personId !== "string" || typeof sessionVersion !== "number" || typeof sessionId !== "string") return null;
+  if (typeof personId !== "string" || typeof sessionVersion !== "number" || typeof sessionId !== "string")
+    return null;
   return { personId, sessionVersion, sessionId };
 };
 
@@ -68,7 +69,9 @@ export function authOptions(requestId = "", refused: (error: unknown) => void = 
       session: async ({ session, token }) => {
         const held = heldIn(token);
         const holder = held && (await sessionHolder(held));
-        return (holder ? { expires: session.expires, user: { name: holder.name, email: holder.email } } : {}) as Session;
+        return (
+          holder ? { expires: session.expires, user: { name: holder.name, email: holder.email } } : {}
+        ) as Session;
       },
       redirect: async ({ url, baseUrl }) => new URL(ownPath(url, baseUrl), baseUrl).href,
     },

@@ -1,7 +1,7 @@
 import { randomUUID } from "node:crypto";
 import { env } from "@/lib/env";
-import { Refusal } from "@/lib/services/errors";
 import type { Visitor } from "@/lib/services/accounts/visitor";
+import { Refusal } from "@/lib/services/errors";
 import { seeOther } from "./auth-route";
 import { answer, assertOwnOrigin, bodyWithin, parsedBody, pathIds, refusal } from "./handle";
 import { ownPath } from "./own-address";
@@ -39,7 +39,8 @@ export function readSite(run: Run): Handler {
 export function writeSite(options: { status?: 200 | 201; form?: { done: string }; run: Run }): Handler {
   return async (request, route) => {
     const plainForm =
-      options.form && /^application\/x-www-form-urlencoded\b/i.test(request.headers.get("content-type") ?? "");
+      options.form &&
+      /^application\/x-www-form-urlencoded\b/i.test(request.headers.get("content-type") ?? "");
     return handled(request, route, async (visitor, ids) => {
       assertOwnOrigin(request);
       const text = await bodyWithin(request, 20_000);

@@ -41,7 +41,10 @@ export function letterOf(row: Waiting, from: string): Letter | null {
     from,
     to: { name: "", address },
     envelope: { from: sender, to: address },
-    subject: row.subject.replace(/[\s\p{Cc}]+/gu, " ").trim().slice(0, 250),
+    subject: row.subject
+      .replace(/[\s\p{Cc}]+/gu, " ")
+      .trim()
+      .slice(0, 250),
     text: row.body,
     messageId: `<${key}@${domain}>`,
     headers: { "Auto-Submitted": "auto-generated", "X-Auto-Response-Suppress": "All" },

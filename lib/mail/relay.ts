@@ -1,8 +1,8 @@
 import { sql } from "drizzle-orm";
 import { createTransport } from "nodemailer";
+import type { ProjectId } from "@/lib/contracts/ids";
 import { env } from "@/lib/env";
 import { enter, throughDoor } from "@/lib/services/context";
-import type { ProjectId } from "@/lib/contracts/ids";
 import { type Letter, letterOf, type Waiting } from "./letter";
 
 /** A claimed letter that nobody reported on is taken up again after this: the relay that held it is gone. */
@@ -66,7 +66,8 @@ async function claim(): Promise<Waiting[]> {
 async function send(server: MailServer, row: Waiting, from: string): Promise<keyof Sent> {
   const letter = letterOf(row, from);
   if (!letter) return fail(row, "The address is not one that mail is sent to.");
-  if (!(await mayStillRead(row))) return fail(row, "Not sent: the recipient has no access to the project any more.");
+  if (!(await mayStillRead(row)))
+    return fail(row, "Not sent: the recipient has no access to the project any more.");
   try {
     await server.sendMail(letter);
   } catch (error) {
@@ -95,7 +96,9 @@ async function mayStillRead(row: Waiting): Promise<boolean> {
 }
 
 async function fail(row: Waiting, reason: string): Promise<"failed"> {
-  await throughDoor("relay", (tx) => tx.execute(sql`update outbox set failure = ${reason} where id = ${row.id}`));
+  await throughDoor("relay", (tx) =>
+    tx.execute(sql`update outbox set failure = ${reason} where id = ${row.id}`),
+  );
   return "failed";
 }
 
@@ -126,7 +129,9 @@ export function startRelay(): { stop: () => Promise<void> } {
       const cause = String((error as Error).message);
       if (cause !== complained) {
         complained = cause;
-        process.stderr.write(`${JSON.stringify({ at: new Date().toISOString(), event: "mail relay waits", cause })}\n`);
+        process.stderr.write(
+          `${JSON.stringify({ at: new Date().toISOString(), event: "mail relay waits", cause })}\n`,
+        );
       }
     }
     if (running) timer = setTimeout(go, LOOK_EVERY_MS).unref();

@@ -36,7 +36,13 @@ describe("the catalogue of the database", () => {
   });
 
   it("has policies with USING and WITH CHECK on the current project, and no others but the reviewed ones", async () => {
-    const rows = await stored<{ tablename: string; policyname: string; cmd: string; qual: string; with_check: string }>(
+    const rows = await stored<{
+      tablename: string;
+      policyname: string;
+      cmd: string;
+      qual: string;
+      with_check: string;
+    }>(
       "select tablename, policyname, cmd, qual, with_check from pg_policies where schemaname = 'public' order by 1, 2",
     );
     const byTable = new Map<string, typeof rows>();
@@ -58,9 +64,13 @@ describe("the catalogue of the database", () => {
 
   it("gives the application's role no table, no way round row security, no TRUNCATE and no DDL", async () => {
     expect(
-      await stored("select rolsuper, rolbypassrls, rolcreaterole, rolcreatedb from pg_roles where rolname = 'holdground_app'"),
+      await stored(
+        "select rolsuper, rolbypassrls, rolcreaterole, rolcreatedb from pg_roles where rolname = 'holdground_app'",
+      ),
     ).toEqual([{ rolsuper: false, rolbypassrls: false, rolcreaterole: false, rolcreatedb: false }]);
-    expect(await stored("select relname from pg_class where relowner = 'holdground_app'::regrole")).toEqual([]);
+    expect(await stored("select relname from pg_class where relowner = 'holdground_app'::regrole")).toEqual(
+      [],
+    );
     expect(
       await stored(`
         select c.relname from pg_class c where c.relnamespace = 'public'::regnamespace and c.relkind = 'r'
@@ -68,8 +78,12 @@ describe("the catalogue of the database", () => {
             or has_table_privilege('holdground_app', c.oid, 'TRIGGER')
             or has_table_privilege('holdground_app', c.oid, 'REFERENCES'))`),
     ).toEqual([]);
-    expect(await stored("select has_schema_privilege('holdground_app', 'public', 'CREATE') as may")).toEqual([{ may: false }]);
-    expect(await stored("select 1 from pg_auth_members where member = 'holdground_app'::regrole")).toEqual([]);
+    expect(await stored("select has_schema_privilege('holdground_app', 'public', 'CREATE') as may")).toEqual([
+      { may: false },
+    ]);
+    expect(await stored("select 1 from pg_auth_members where member = 'holdground_app'::regrole")).toEqual(
+      [],
+    );
   });
 
   it("lets the application change or delete no append-only table, by grant as well as by trigger", async () => {
@@ -80,7 +94,9 @@ describe("the catalogue of the database", () => {
       where has_table_privilege('holdground_app', c.oid, 'UPDATE') or has_table_privilege('holdground_app', c.oid, 'DELETE')
         or has_any_column_privilege('holdground_app', c.oid, 'UPDATE')`);
     expect(rows).toEqual([]);
-    const guarded = await stored<{ n: number }>("select count(*)::int as n from pg_trigger where tgname in ('append_only', 'append_only_whole') and tgenabled <> 'D'");
+    const guarded = await stored<{ n: number }>(
+      "select count(*)::int as n from pg_trigger where tgname in ('append_only', 'append_only_whole') and tgenabled <> 'D'",
+    );
     expect(guarded[0]?.n).toBeGreaterThanOrEqual(50);
   });
 
@@ -89,7 +105,9 @@ describe("the catalogue of the database", () => {
       select relname from pg_class where relnamespace = 'public'::regnamespace and relkind in ('v', 'm')
         and not coalesce('security_invoker=true' = any(reloptions), false)`);
     expect(rows).toEqual([]);
-    expect(await stored("select count(*)::int as n from pg_views where schemaname = 'public'")).toEqual([{ n: 2 }]);
+    expect(await stored("select count(*)::int as n from pg_views where schemaname = 'public'")).toEqual([
+      { n: 2 },
+    ]);
   });
 
   it("has no function that runs with its owner's rights but the reviewed ones", async () => {

@@ -40,7 +40,13 @@ describe("where a sign-in leads to", () => {
     });
 
   it("never leaves the site, whatever is asked for", () => {
-    for (const wanted of ["https:evil.example", "%0d%0a//evil.example", "/%2f/evil.example", ".//evil.example", "?//evil"])
+    for (const wanted of [
+      "https:evil.example",
+      "%0d%0a//evil.example",
+      "/%2f/evil.example",
+      ".//evil.example",
+      "?//evil",
+    ])
       expect(new URL(ownPath(wanted, origin), origin).origin).toBe(origin);
   });
 });

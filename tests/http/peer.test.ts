@@ -27,7 +27,11 @@ describe("the peer of a request", () => {
   });
 
   it("loses the headers by which a client could pass for the framework", () => {
-    const headers = cleaned("10.0.0.2", { "x-middleware-subrequest": "proxy", "x-forwarded-host": "evil.example", accept: "*/*" }, ["10.0.0.2"]);
+    const headers = cleaned(
+      "10.0.0.2",
+      { "x-middleware-subrequest": "proxy", "x-forwarded-host": "evil.example", accept: "*/*" },
+      ["10.0.0.2"],
+    );
     expect(headers).toEqual({ accept: "*/*", [PEER_HEADER]: "10.0.0.2" });
   });
 });

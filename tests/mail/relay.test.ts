@@ -69,20 +69,37 @@ const queue = (letters: Partial<Letter>[]) =>
     queueMail(
       tx,
       site.lead,
-      letters.map((letter) => ({ key: randomUUID(), recipient: "mira@office.example", subject: "A subject", body: "A body", ...letter })),
+      letters.map((letter) => ({
+        key: randomUUID(),
+        recipient: "mira@office.example",
+        subject: "A subject",
+        body: "A body",
+        ...letter,
+      })),
     ),
   );
-const due = () => asSuperuser((db) => db.query("update outbox set next_attempt_at = now() where sent_at is null"));
+const due = () =>
+  asSuperuser((db) => db.query("update outbox set next_attempt_at = now() where sent_at is null"));
 const outbox = () =>
-  stored<{ sent: boolean; failure: string | null; attempts: number }>("select sent_at is not null as sent, failure, attempts from outbox order by created_at, id");
+  stored<{ sent: boolean; failure: string | null; attempts: number }>(
+    "select sent_at is not null as sent, failure, attempts from outbox order by created_at, id",
+  );
 
 describe("the mail relay", () => {
   it("sends each waiting letter once, to its one recipient", async () => {
     const port = await openSink();
-    await queue([{ recipient: "a@office.example" }, { recipient: "b@office.example" }, { recipient: "c@office.example" }]);
+    await queue([
+      { recipient: "a@office.example" },
+      { recipient: "b@office.example" },
+      { recipient: "c@office.example" },
+    ]);
     expect(await sendWaiting(through(port), FROM)).toEqual({ sent: 3, delayed: 0, failed: 0 });
     expect(await sendWaiting(through(port), FROM)).toEqual({ sent: 0, delayed: 0, failed: 0 });
-    expect(received.map(({ to }) => to.join()).sort()).toEqual(["a@office.example", "b@office.example", "c@office.example"]);
+    expect(received.map(({ to }) => to.join()).sort()).toEqual([
+      "a@office.example",
+      "b@office.example",
+      "c@office.example",
+    ]);
     expect(received.every(({ from }) => from === "register@holdground.example")).toBe(true);
   });
 
@@ -90,7 +107,9 @@ describe("the mail relay", () => {
     const port = await openSink();
     await new Promise<void>((done) => sink?.close(() => done()));
     sink = undefined;
-    await queue(Array.from({ length: 500 }, (_, n) => ({ key: `j01/${n}`, recipient: `p${n}@office.example` })));
+    await queue(
+      Array.from({ length: 500 }, (_, n) => ({ key: `j01/${n}`, recipient: `p${n}@office.example` })),
+    );
     const down = await sendWaiting(through(port), FROM);
     expect(down.sent).toBe(0);
     expect(down.failed).toBe(0);
@@ -112,7 +131,12 @@ describe("the mail relay", () => {
         stream.on("data", (part: Buffer) => parts.push(part));
         stream.on("end", () => {
           const text = Buffer.concat(parts).toString("utf8");
-          received.push({ to: session.envelope.rcptTo.map(({ address }) => address), from: "", text, id: /^Message-ID: (.*)$/im.exec(text)?.[1] ?? "" });
+          received.push({
+            to: session.envelope.rcptTo.map(({ address }) => address),
+            from: "",
+            text,
+            id: /^Message-ID: (.*)$/im.exec(text)?.[1] ?? "",
+          });
           if (cut) raw?.destroy();
           else done();
         });
@@ -132,7 +156,11 @@ describe("the mail relay", () => {
   });
 
   it("records a refusal for good, tries again after a passing one, and lets the others go", async () => {
-    const codes: Record<string, number> = { "gone@office.example": 550, "full@office.example": 450, "busy@office.example": 421 };
+    const codes: Record<string, number> = {
+      "gone@office.example": 550,
+      "full@office.example": 450,
+      "busy@office.example": 421,
+    };
     const port = await openSink({
       onRcptTo(address, _session, done) {
         const code = codes[address.address];
@@ -142,15 +170,22 @@ describe("the mail relay", () => {
     await queue([...Object.keys(codes), "fine@office.example"].map((recipient) => ({ recipient })));
     expect(await sendWaiting(through(port), FROM)).toEqual({ sent: 1, delayed: 2, failed: 1 });
     expect(received.map(({ to }) => to.join())).toEqual(["fine@office.example"]);
-    const [gone] = await stored<{ failure: string }>("select failure from outbox where recipient = 'gone@office.example'");
+    const [gone] = await stored<{ failure: string }>(
+      "select failure from outbox where recipient = 'gone@office.example'",
+    );
     expect(gone?.failure).toContain("550");
-    const waiting = await stored<{ recipient: string }>("select recipient from outbox where sent_at is null and failure is null and next_attempt_at > now() order by 1");
+    const waiting = await stored<{ recipient: string }>(
+      "select recipient from outbox where sent_at is null and failure is null and next_attempt_at > now() order by 1",
+    );
     expect(waiting.map(({ recipient }) => recipient)).toEqual(["busy@office.example", "full@office.example"]);
   });
 
   it("waits longer after each try, five minutes at most, and gives up after five days", async () => {
     expect([1, 2, 3, 6, 7, 40].map(backOff_s)).toEqual([5, 10, 20, 160, 300, 300]);
-    const port = await openSink({ onRcptTo: (_address, _session, done) => done(Object.assign(new Error("Try later"), { responseCode: 451 })) });
+    const port = await openSink({
+      onRcptTo: (_address, _session, done) =>
+        done(Object.assign(new Error("Try later"), { responseCode: 451 })),
+    });
     await queue([{}]);
     await asSuperuser((db) => db.query("update outbox set created_at = now() - interval '5 days 1 minute'"));
     expect((await sendWaiting(through(port), FROM)).failed).toBe(1);
@@ -163,7 +198,9 @@ describe("the mail relay", () => {
     const address = silent.address();
     await queue([{}]);
     const began = performance.now();
-    expect(await sendWaiting(through(typeof address === "object" && address ? address.port : 0), FROM)).toMatchObject({ delayed: 1 });
+    expect(
+      await sendWaiting(through(typeof address === "object" && address ? address.port : 0), FROM),
+    ).toMatchObject({ delayed: 1 });
     expect(performance.now() - began).toBeLessThan(25_000);
     silent.close();
   });
@@ -182,7 +219,9 @@ describe("the mail relay", () => {
   it("takes up a letter again that a relay claimed and died with", async () => {
     const port = await openSink();
     await queue([{ key: "orphan" }]);
-    await asSuperuser((db) => db.query("update outbox set attempts = 1, next_attempt_at = now() + interval '120 seconds'"));
+    await asSuperuser((db) =>
+      db.query("update outbox set attempts = 1, next_attempt_at = now() + interval '120 seconds'"),
+    );
     expect((await sendWaiting(through(port), FROM)).sent).toBe(0);
     await due();
     expect((await sendWaiting(through(port), FROM)).sent).toBe(1);
@@ -191,7 +230,9 @@ describe("the mail relay", () => {
   it("sends nothing that was queued by a transaction that failed", async () => {
     const port = await openSink();
     await inProject(site.lead, async (tx) => {
-      await queueMail(tx, site.lead, [{ key: "rolled back", recipient: "a@office.example", subject: "s", body: "b" }]);
+      await queueMail(tx, site.lead, [
+        { key: "rolled back", recipient: "a@office.example", subject: "s", body: "b" },
+      ]);
       throw new Error("back");
     }).catch(() => {});
     expect((await sendWaiting(through(port), FROM)).sent).toBe(0);
@@ -222,7 +263,10 @@ describe("the mail relay", () => {
     await queue([
       { subject: "Zone B\r\nBcc: evil@evil.example\r\n\r\nBody" },
       { subject: `"quoted" Bcc: x@evil.example ${"long ".repeat(400)}` },
-      { subject: "Größe ≤ 1,0 · Σ", body: "First line\r\n.\r\nRCPT TO:<evil@evil.example>\r\nBcc: evil@evil.example" },
+      {
+        subject: "Größe ≤ 1,0 · Σ",
+        body: "First line\r\n.\r\nRCPT TO:<evil@evil.example>\r\nBcc: evil@evil.example",
+      },
       { recipient: "a@office.example\r\nBcc: evil@evil.example" },
       { recipient: "a@office.example,evil@evil.example" },
       { recipient: '"evil@evil.example"@office.example' },
@@ -240,11 +284,24 @@ describe("the mail relay", () => {
 });
 
 describe("a letter", () => {
-  const row: Waiting = { id: "1", projectId: null, messageKey: "change/1/2", recipientId: null, recipient: "a@office.example", subject: "s", body: "b", attempts: 1 };
+  const row: Waiting = {
+    id: "1",
+    projectId: null,
+    messageKey: "change/1/2",
+    recipientId: null,
+    recipient: "a@office.example",
+    subject: "s",
+    body: "b",
+    attempts: 1,
+  };
 
   it("has a Message-ID that stands on its key alone", () => {
-    expect(letterOf({ ...row, attempts: 9, body: "other" }, FROM)?.messageId).toBe(letterOf(row, FROM)?.messageId);
-    expect(letterOf({ ...row, messageKey: "change/1/3" }, FROM)?.messageId).not.toBe(letterOf(row, FROM)?.messageId);
+    expect(letterOf({ ...row, attempts: 9, body: "other" }, FROM)?.messageId).toBe(
+      letterOf(row, FROM)?.messageId,
+    );
+    expect(letterOf({ ...row, messageKey: "change/1/3" }, FROM)?.messageId).not.toBe(
+      letterOf(row, FROM)?.messageId,
+    );
   });
 
   it("is not made for an address in another form than the stored one", () => {

@@ -4,9 +4,9 @@ import { client } from "@/db/client";
 import * as t from "@/db/schema";
 import type { Role } from "@/lib/access/policy";
 import type { PersonId, ProjectId } from "@/lib/contracts/ids";
+import { hashPassword } from "@/lib/services/accounts/passwords";
 import type { SignedIn } from "@/lib/services/accounts/session-holder";
 import type { Visitor } from "@/lib/services/accounts/visitor";
-import { hashPassword } from "@/lib/services/accounts/passwords";
 import type { Context } from "@/lib/services/context";
 import { createProject } from "@/lib/services/projects/create-project";
 
@@ -30,7 +30,12 @@ export async function makePerson(
   const email = options.email ?? `${name.toLowerCase().replace(/\W+/g, ".")}@example.test`;
   const [row] = await client()
     .database.insert(t.person)
-    .values({ name, email, siteAdministrator, passwordHash: password === null ? null : await hashPassword(password) })
+    .values({
+      name,
+      email,
+      siteAdministrator,
+      passwordHash: password === null ? null : await hashPassword(password),
+    })
     .returning({ id: t.person.id });
   if (!row) throw new Error("no person");
   return { id: row.id, name, email, siteAdministrator };
@@ -71,7 +76,10 @@ export type Site = {
 export async function makeSite(number: string): Promise<Site> {
   const administrator = await makePerson(`Admin ${number}`, { siteAdministrator: true });
   const leadPerson = await makePerson(`Lead ${number}`);
-  const { id: projectId } = await createProject(visitor(administrator), projectInput(number, leadPerson.email));
+  const { id: projectId } = await createProject(
+    visitor(administrator),
+    projectInput(number, leadPerson.email),
+  );
   const contextOf = (person: SignedIn, role: Role): Context => ({
     person,
     projectId,
@@ -82,7 +90,11 @@ export async function makeSite(number: string): Promise<Site> {
   for (const role of ["geotechnical", "structural", "reader"] as const) {
     const person = await makePerson(`${role} ${number}`);
     await asSuperuser((db) =>
-      db.query("insert into membership (project_id, person_id, role) values ($1, $2, $3)", [projectId, person.id, role]),
+      db.query("insert into membership (project_id, person_id, role) values ($1, $2, $3)", [
+        projectId,
+        person.id,
+        role,
+      ]),
     );
     site[role] = contextOf(person, role);
   }
@@ -124,16 +136,24 @@ export async function tokenMailedTo(email: string): Promise<string> {
 
 /** The audit verbs of a project, oldest first. */
 export const auditVerbs = async (projectId: string): Promise<string[]> =>
-  (await stored<{ verb: string }>("select verb from audit_event where project_id = $1 order by seq", [projectId])).map(
-    ({ verb }) => verb,
-  );
+  (
+    await stored<{ verb: string }>("select verb from audit_event where project_id = $1 order by seq", [
+      projectId,
+    ])
+  ).map(({ verb }) => verb);
 
 /** What a promise was refused with; fails when it was not. */
-export async function refusalOf(promise: Promise<unknown>): Promise<{ code: string; status: number; fields: Record<string, string> }> {
+export async function refusalOf(
+  promise: Promise<unknown>,
+): Promise<{ code: string; status: number; fields: Record<string, string> }> {
   try {
     await promise;
   } catch (error) {
-    const { code, status, fields = {} } = error as { code: string; status: number; fields?: Record<string, string> };
+    const {
+      code,
+      status,
+      fields = {},
+    } = error as { code: string; status: number; fields?: Record<string, string> };
     if (typeof status !== "number") throw error;
     return { code, status, fields };
   }

@@ -17,9 +17,13 @@ export async function changePassword(visitor: Visitor, given: unknown): Promise<
   const attempt = await beginAttempt(person.email, visitor.address);
   const [found] = await client().database.select().from(t.person).where(eq(t.person.id, person.id));
   if (!(await isPassword(found?.passwordHash, currentPassword)))
-    throw new Invalid("One field needs another look.", { currentPassword: "This is not the current password." });
+    throw new Invalid("One field needs another look.", {
+      currentPassword: "This is not the current password.",
+    });
   if (password === currentPassword)
-    throw new Invalid("One field needs another look.", { password: "This is the password that you have now." });
+    throw new Invalid("One field needs another look.", {
+      password: "This is the password that you have now.",
+    });
   await attemptSucceeded(attempt);
   const passwordHash = await hashPassword(password);
   await client().database.transaction(async (tx) => {

@@ -20,7 +20,8 @@ export async function endSession(sessionId: string, personId: PersonId, requestI
       )
       .returning({ address: t.personSession.address });
     const [session] = ended;
-    if (session) await siteEvent(tx, { address: session.address, requestId }, { verb: "account:sign-out", personId });
+    if (session)
+      await siteEvent(tx, { address: session.address, requestId }, { verb: "account:sign-out", personId });
   });
 }
 

@@ -58,7 +58,11 @@ export async function acceptInvitation(
         roles: [],
         requestId: visitor.requestId,
       },
-      { verb: "member:join", subject: `person/${personId}`, detail: { invitation: link.id, roles: link.roles } },
+      {
+        verb: "member:join",
+        subject: `person/${personId}`,
+        detail: { invitation: link.id, roles: link.roles },
+      },
     );
     return { projectId: link.project_id, email: link.email, signIn: !holder?.hasPassword };
   });
@@ -82,7 +86,9 @@ async function projectOf(tx: Transaction, link: Link): Promise<string> {
 function assertIsHolder(visitor: Visitor, holder: Holder, link: Link): PersonId {
   if (!visitor.person) throw new SignedOut(`Please sign in as ${link.email} to accept this invitation.`);
   if (visitor.person.id !== holder.id)
-    throw new Forbidden(`This invitation is for ${link.email}. Please sign out and sign in with that address.`);
+    throw new Forbidden(
+      `This invitation is for ${link.email}. Please sign out and sign in with that address.`,
+    );
   return holder.id;
 }
 

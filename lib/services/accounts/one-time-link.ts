@@ -43,9 +43,12 @@ export async function makeLink(
 }
 
 const refused = () =>
-  new Invalid("This link cannot be used: it has been used already, was withdrawn or is too old. Please ask for a new one.", {
-    token: "This link cannot be used any more.",
-  });
+  new Invalid(
+    "This link cannot be used: it has been used already, was withdrawn or is too old. Please ask for a new one.",
+    {
+      token: "This link cannot be used any more.",
+    },
+  );
 
 /** Reads a link without using it up: mail scanners open links too. Refuses one that cannot be used. */
 export async function readLink(tx: Transaction, kind: Link["kind"], token: string): Promise<Link> {

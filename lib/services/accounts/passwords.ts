@@ -14,7 +14,10 @@ const spelled = (password: string) => password.normalize("NFKC");
 export const hashPassword = (password: string): Promise<string> => hash(spelled(password), COST);
 
 /** True when the password is the one under this hash; for an account without one it takes as long and is false. */
-export async function isPassword(passwordHash: string | null | undefined, password: string): Promise<boolean> {
+export async function isPassword(
+  passwordHash: string | null | undefined,
+  password: string,
+): Promise<boolean> {
   const matches = await verify(passwordHash ?? NOBODY, spelled(password)).catch(() => false);
   return matches && passwordHash != null;
 }

@@ -22,7 +22,10 @@ export async function findPeople(visitor: Visitor, given: unknown): Promise<{ pe
 }
 
 /** Opens or shuts an account. Shutting ends every session and open link; what the person did stays as it is. */
-export async function setAccountOpen(visitor: Visitor, given: unknown): Promise<{ id: string; open: boolean }> {
+export async function setAccountOpen(
+  visitor: Visitor,
+  given: unknown,
+): Promise<{ id: string; open: boolean }> {
   const administrator = siteAdministrator(visitor);
   const { personId, open } = parse(openAccountInput, given);
   if (personId === administrator.id) throw new Conflict("You cannot shut your own account.");

@@ -29,8 +29,6 @@ export async function resetPassword(visitor: Visitor, given: unknown): Promise<{
   });
 }
 
-
-
 /** Other reset links for the address end with the password that they would have replaced. */
 async function withdrawOtherLinks(tx: Transaction, email: string): Promise<void> {
   await tx.execute(sql`

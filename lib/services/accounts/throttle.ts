@@ -68,7 +68,8 @@ export async function beginAttempt(account: string, address: string): Promise<At
       ) f`);
     const counted = rows[0];
     if (!counted) throw new Error("A count of nothing is still a row.");
-    const left = (failures: number, free: number, age_s: number | null) => wait_s(failures, free) - (age_s ?? 0);
+    const left = (failures: number, free: number, age_s: number | null) =>
+      wait_s(failures, free) - (age_s ?? 0);
     const remaining_s = counted.known
       ? left(counted.pair, FREE.knownPlace, counted.pair_age)
       : Math.max(

@@ -15,7 +15,9 @@ export async function changeMember(context: Context, given: unknown) {
     await lockMembership(tx, context);
     const before = await memberNow(tx, context, memberId);
     if ([...seenRoles].sort().join() !== [...before.roles].sort().join())
-      throw new Superseded("Somebody changed this member's roles meanwhile.", { current: { roles: before.roles } });
+      throw new Superseded("Somebody changed this member's roles meanwhile.", {
+        current: { roles: before.roles },
+      });
     await tx.execute(sql`
       delete from membership where project_id = ${context.projectId} and person_id = ${memberId}
         and role <> all(${sql.param(roles)}::text[])`);

@@ -20,7 +20,8 @@ export async function inviteMember(context: Context, given: unknown) {
     const member = await tx.execute(sql`
       select 1 from membership m join person p on p.id = m.person_id
       where m.project_id = ${context.projectId} and p.email = ${email} limit 1`);
-    if (member.rowCount) throw new Conflict("This person is a member already. Change the roles in the list of members.");
+    if (member.rowCount)
+      throw new Conflict("This person is a member already. Change the roles in the list of members.");
     await tx.execute(sql`
       update one_time_link set used_at = now()
       where project_id = ${context.projectId} and kind = 'invitation' and email = ${email} and used_at is null`);
@@ -35,9 +36,17 @@ export async function inviteMember(context: Context, given: unknown) {
       sql`select number, title from project where id = ${context.projectId}`,
     );
     await queueMail(tx, context, [
-      { key: `invitation/${id}`, recipient: email, ...invitationLetter(rows[0], context.person.name, roles, token) },
+      {
+        key: `invitation/${id}`,
+        recipient: email,
+        ...invitationLetter(rows[0], context.person.name, roles, token),
+      },
     ]);
-    await audit(tx, context, { verb: "member:invite", subject: `invitation/${id}`, detail: { email, roles } });
+    await audit(tx, context, {
+      verb: "member:invite",
+      subject: `invitation/${id}`,
+      detail: { email, roles },
+    });
     return { id, email, roles };
   });
 }

@@ -24,7 +24,10 @@ export async function listMembers(context: Context): Promise<MemberList> {
       order by l.created_at desc limit 500`);
     return { members: members.rows, open: open.rows };
   });
-  const mail = await mailOf(context, open.map(({ id }) => `invitation/${id}`));
+  const mail = await mailOf(
+    context,
+    open.map(({ id }) => `invitation/${id}`),
+  );
   return {
     members,
     invitations: open.map((invitation) => ({
@@ -35,7 +38,10 @@ export async function listMembers(context: Context): Promise<MemberList> {
 }
 
 /** How far the letters of these keys have come. Only the relay's door sees letters, so these are read through it. */
-async function mailOf(context: Context, keys: string[]): Promise<Map<string, Pick<Invitation, "mail" | "mailFailure">>> {
+async function mailOf(
+  context: Context,
+  keys: string[],
+): Promise<Map<string, Pick<Invitation, "mail" | "mailFailure">>> {
   if (keys.length === 0) return new Map();
   const { rows } = await throughDoor("relay", (tx) =>
     tx.execute<{ key: string; sent: boolean; failure: string | null }>(sql`

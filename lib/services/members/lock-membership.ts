@@ -1,8 +1,8 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { Role } from "@/lib/access/policy";
-import { Conflict, NotFound } from "../errors";
 import type { Context } from "../context";
+import { Conflict, NotFound } from "../errors";
 
 /** Lets one change of a project's members happen at a time, until this transaction ends. */
 export async function lockMembership(tx: Transaction, context: Context): Promise<void> {

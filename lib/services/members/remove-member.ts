@@ -13,7 +13,9 @@ export async function removeMember(context: Context, given: unknown) {
   return inProject(context, async (tx) => {
     await lockMembership(tx, context);
     const before = await memberNow(tx, context, memberId);
-    await tx.execute(sql`delete from membership where project_id = ${context.projectId} and person_id = ${memberId}`);
+    await tx.execute(
+      sql`delete from membership where project_id = ${context.projectId} and person_id = ${memberId}`,
+    );
     await assertLeadRemains(tx, context);
     await audit(tx, context, {
       verb: "member:remove",

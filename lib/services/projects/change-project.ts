@@ -30,13 +30,16 @@ export async function changeProject(context: Context, given: unknown): Promise<P
       const before = await readFacts(tx, context);
       assertSeen(revision, before.revision, "The project", before);
       const changed = Object.fromEntries(
-        Object.entries(wanted).filter(([name, value]) => value !== undefined && value !== before[name as keyof typeof before]),
+        Object.entries(wanted).filter(
+          ([name, value]) => value !== undefined && value !== before[name as keyof typeof before],
+        ),
       );
       if (Object.keys(changed).length === 0) return before;
       const frame = FRAME.filter((name) => name in changed);
       if (frame.length > 0 && !reason?.trim() && (await hasGround(tx, context)))
         throw new Invalid("Holes or footings are recorded on this grid and datum.", {
-          reason: "Say why grid or datum changes, and see to it that recorded coordinates and levels still hold.",
+          reason:
+            "Say why grid or datum changes, and see to it that recorded coordinates and levels still hold.",
         });
       await tx
         .update(t.project)
@@ -47,7 +50,9 @@ export async function changeProject(context: Context, given: unknown): Promise<P
         verb: "project:change",
         subject: `project/${context.projectId}`,
         detail: {
-          before: Object.fromEntries(Object.keys(changed).map((name) => [name, before[name as keyof typeof before]])),
+          before: Object.fromEntries(
+            Object.keys(changed).map((name) => [name, before[name as keyof typeof before]]),
+          ),
           after: changed,
           reason: reason ?? "",
         },
@@ -56,7 +61,11 @@ export async function changeProject(context: Context, given: unknown): Promise<P
     });
   } catch (error) {
     if (databaseCode(error) === "23505" || (error as { extra?: { constraint?: string } }).extra?.constraint)
-      throw new Invalid("One field needs another look.", { number: "There is a project with this number already." }, 409);
+      throw new Invalid(
+        "One field needs another look.",
+        { number: "There is a project with this number already." },
+        409,
+      );
     throw error;
   }
 }

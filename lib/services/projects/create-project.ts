@@ -1,8 +1,8 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import * as t from "@/db/schema";
-import { createProjectInput } from "@/lib/contracts/projects";
 import type { PersonId, ProjectId } from "@/lib/contracts/ids";
+import { createProjectInput } from "@/lib/contracts/projects";
 import { env } from "@/lib/env";
 import { makeLink } from "../accounts/one-time-link";
 import { siteEvent } from "../accounts/site-event";
@@ -38,17 +38,29 @@ export async function createProject(visitor: Visitor, given: unknown) {
         .insert(t.membership)
         .values({ projectId, personId: lead.id, role: "lead", grantedBy: administrator.id });
       await tellLead(tx, projectId, settings, { ...lead, email: leadEmail }, administrator);
-      await siteEvent(tx, visitor, { verb: "project:create", personId: administrator.id, detail: { projectId } });
+      await siteEvent(tx, visitor, {
+        verb: "project:create",
+        personId: administrator.id,
+        detail: { projectId },
+      });
       await audit(
         tx,
         { person: administrator, projectId, roles: [], requestId: visitor.requestId },
-        { verb: "project:create", subject: `project/${projectId}`, detail: { ...settings, criteria, lead: lead.id } },
+        {
+          verb: "project:create",
+          subject: `project/${projectId}`,
+          detail: { ...settings, criteria, lead: lead.id },
+        },
       );
       return { id: projectId, number: settings.number, title: settings.title };
     });
   } catch (error) {
     if (databaseCode(error) === "23505")
-      throw new Invalid("One field needs another look.", { number: "There is a project with this number already." }, 409);
+      throw new Invalid(
+        "One field needs another look.",
+        { number: "There is a project with this number already." },
+        409,
+      );
     throw error;
   }
 }

@@ -43,7 +43,9 @@ class LiveChanges {
       this.connection = connection;
       this.connecting = false;
       // A notification has no memory: what happened while nobody listened is read again.
-      if (again) for (const project of this.listeners.values()) for (const listener of project) listener({ reread: true });
+      if (again)
+        for (const project of this.listeners.values())
+          for (const listener of project) listener({ reread: true });
       if (this.listeners.size === 0) await this.close();
     } catch {
       this.connecting = false;

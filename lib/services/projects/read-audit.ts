@@ -25,7 +25,9 @@ async function page(
     where e.project_id = ${context.projectId} ${before === undefined ? sql`` : sql`and e.seq < ${before}`}
       ${search.trim() === "" ? sql`` : sql`and (e.verb ilike ${pattern} or e.subject ilike ${pattern} or e.detail ilike ${pattern} or p.name ilike ${pattern})`}
     order by e.seq desc limit ${limit + 1}`);
-  const events = rows.slice(0, limit).map((row) => ({ ...row, seq: Number(row.seq), detail: JSON.parse(row.detail) }));
+  const events = rows
+    .slice(0, limit)
+    .map((row) => ({ ...row, seq: Number(row.seq), detail: JSON.parse(row.detail) }));
   return { events, next: rows.length > limit ? (events.at(-1)?.seq ?? null) : null };
 }
 
@@ -36,7 +38,8 @@ export async function exportAudit(context: Context): Promise<Response> {
   assertMay(context, "audit:read");
   let before: number | undefined;
   let done = false;
-  const next = () => inProject(context, (tx) => page(tx, context, { search: "", before, limit: EXPORT_PAGE }));
+  const next = () =>
+    inProject(context, (tx) => page(tx, context, { search: "", before, limit: EXPORT_PAGE }));
   const encoder = new TextEncoder();
   const body = new ReadableStream<Uint8Array>({
     start: (out) => out.enqueue(encoder.encode("seq,at,actor,roles,verb,subject,detail,request,hash\r\n")),

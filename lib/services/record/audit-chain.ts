@@ -1,6 +1,6 @@
 import { sql } from "drizzle-orm";
-import type { ProjectId } from "@/lib/contracts/ids";
 import { client, type Transaction } from "@/db/client";
+import type { ProjectId } from "@/lib/contracts/ids";
 import { enter, sha256 } from "../context";
 
 /** A row of the audit trail as the hash stands on it: the moment to the microsecond, ids as text. */
@@ -23,7 +23,18 @@ export const CHAIN_BEGINS = "0".repeat(64);
 /** The hash that the database's trigger gave this event: over the previous hash and every column, a line each. */
 export const chainHash = (e: Omit<ChainedEvent, "hash">): string =>
   sha256(
-    [e.previousHash, e.projectId, e.seq, e.at, e.actorId, e.roles, e.verb, e.subject, e.requestId, e.detail].join("\n"),
+    [
+      e.previousHash,
+      e.projectId,
+      e.seq,
+      e.at,
+      e.actorId,
+      e.roles,
+      e.verb,
+      e.subject,
+      e.requestId,
+      e.detail,
+    ].join("\n"),
   );
 
 export type Break = { seq: number; what: string };
@@ -36,8 +47,10 @@ export function followChain(
   let last = end;
   for (const event of events) {
     const broken = (what: string) => ({ end: last, broken: { seq: event.seq, what } });
-    if (event.seq !== last.seq + 1) return broken(`event ${last.seq + 1} is missing: the next one is ${event.seq}`);
-    if (event.previousHash !== last.hash) return broken(`event ${event.seq} does not follow from the one before it`);
+    if (event.seq !== last.seq + 1)
+      return broken(`event ${last.seq + 1} is missing: the next one is ${event.seq}`);
+    if (event.previousHash !== last.hash)
+      return broken(`event ${event.seq} does not follow from the one before it`);
     if (chainHash(event) !== event.hash) return broken(`event ${event.seq} is not what was written`);
     last = { seq: event.seq, hash: event.hash };
   }
@@ -74,7 +87,9 @@ export async function inEachProject<Result>(
   const { database } = client();
   const projects = await database.transaction(async (tx) => {
     await tx.execute(sql`select set_config('app.door', 'verifier', true)`);
-    return (await tx.execute<{ id: ProjectId; number: string }>(sql`select id, number from project order by number`)).rows;
+    return (
+      await tx.execute<{ id: ProjectId; number: string }>(sql`select id, number from project order by number`)
+    ).rows;
   });
   const results: Result[] = [];
   for (const project of projects)

@@ -4,10 +4,20 @@ import { resetPassword } from "@/lib/services/accounts/reset-password";
 import { sessionHolder } from "@/lib/services/accounts/session-holder";
 import { signIn } from "@/lib/services/accounts/sign-in";
 import { freshDatabase } from "../../support/database";
-import { asSuperuser, lookInto, makePerson, PASSWORD, refusalOf, stored, tokenMailedTo, visitor } from "../../support/site";
+import {
+  asSuperuser,
+  lookInto,
+  makePerson,
+  PASSWORD,
+  refusalOf,
+  stored,
+  tokenMailedTo,
+  visitor,
+} from "../../support/site";
 
 const NEW = "otter under the bridge";
-const attempt = (email: string, password: string) => signIn({ email, password, address: "10.1.1.1", requestId: "test" });
+const attempt = (email: string, password: string) =>
+  signIn({ email, password, address: "10.1.1.1", requestId: "test" });
 const links = (email: string) => stored("select 1 from one_time_link where email = $1", [email]);
 
 beforeAll(async () => lookInto((await freshDatabase()).superuserUrl));
@@ -19,10 +29,16 @@ describe("a forgotten password", () => {
     await requestPasswordReset(visitor(), { email: person.email });
     const token = await tokenMailedTo(person.email);
     expect(await resetPassword(visitor(), { token, password: NEW })).toEqual({ email: person.email });
-    const held = { personId: session.id, sessionVersion: session.sessionVersion, sessionId: session.sessionId };
+    const held = {
+      personId: session.id,
+      sessionVersion: session.sessionVersion,
+      sessionId: session.sessionId,
+    };
     expect(await sessionHolder(held)).toBeNull();
     expect((await attempt(person.email, NEW)).id).toBe(person.id);
-    expect((await refusalOf(resetPassword(visitor(), { token, password: "heron over the water" }))).status).toBe(400);
+    expect(
+      (await refusalOf(resetPassword(visitor(), { token, password: "heron over the water" }))).status,
+    ).toBe(400);
     expect((await attempt(person.email, NEW)).id).toBe(person.id);
   });
 
@@ -57,7 +73,9 @@ describe("a forgotten password", () => {
     await requestPasswordReset(visitor(), { email: person.email });
     const token = await tokenMailedTo(person.email);
     await asSuperuser((db) =>
-      db.query("update one_time_link set expires_at = expires_at - interval '11 minutes' where email = $1", [person.email]),
+      db.query("update one_time_link set expires_at = expires_at - interval '11 minutes' where email = $1", [
+        person.email,
+      ]),
     );
     expect((await refusalOf(resetPassword(visitor(), { token, password: NEW }))).status).toBe(400);
     expect((await attempt(person.email, PASSWORD)).id).toBe(person.id);
@@ -68,7 +86,9 @@ describe("a forgotten password", () => {
     await requestPasswordReset(visitor(), { email: person.email });
     const token = await tokenMailedTo(person.email);
     const outcomes = await Promise.allSettled(
-      ["first password here", "second password here"].map((password) => resetPassword(visitor(), { token, password })),
+      ["first password here", "second password here"].map((password) =>
+        resetPassword(visitor(), { token, password }),
+      ),
     );
     expect(outcomes.map(({ status }) => status).sort()).toEqual(["fulfilled", "rejected"]);
   });
@@ -78,13 +98,16 @@ describe("a forgotten password", () => {
     await requestPasswordReset(visitor(), { email: person.email });
     const token = await tokenMailedTo(person.email);
     for (const password of ["short", "aaaaaaaaaaaaaaa", "password1234"])
-      expect((await refusalOf(resetPassword(visitor(), { token, password }))).fields).toHaveProperty("password");
+      expect((await refusalOf(resetPassword(visitor(), { token, password }))).fields).toHaveProperty(
+        "password",
+      );
     expect(await resetPassword(visitor(), { token, password: NEW })).toEqual({ email: person.email });
   });
 
   it("sends at most five links an hour to one address, and says nothing of it", async () => {
     const person = await makePerson("Gwen Ash");
-    for (let n = 0; n < 7; n += 1) await requestPasswordReset(visitor(null, { address: `10.2.0.${n}` }), { email: person.email });
+    for (let n = 0; n < 7; n += 1)
+      await requestPasswordReset(visitor(null, { address: `10.2.0.${n}` }), { email: person.email });
     expect(await links(person.email)).toHaveLength(5);
   });
 
@@ -92,19 +115,30 @@ describe("a forgotten password", () => {
     const person = await makePerson("Hugh Vale");
     await requestPasswordReset(visitor(), { email: " HUGH.vale@Example.Test" });
     const token = await tokenMailedTo(person.email);
-    const rows = await stored<{ all: string }>("select l::text as all from one_time_link l where email = $1", [person.email]);
+    const rows = await stored<{ all: string }>(
+      "select l::text as all from one_time_link l where email = $1",
+      [person.email],
+    );
     expect(rows[0]?.all).not.toContain(token);
-    for (const email of ['"hugh.vale@example.test"@evil.example', "hugh.vale@example.test,x@evil.example", "hugh.vale＠example.test"])
+    for (const email of [
+      '"hugh.vale@example.test"@evil.example',
+      "hugh.vale@example.test,x@evil.example",
+      "hugh.vale＠example.test",
+    ])
       expect((await refusalOf(requestPasswordReset(visitor(), { email }))).fields).toHaveProperty("email");
-    expect(await stored("select distinct recipient from outbox where recipient like '%vale%' or recipient like '%evil%'")).toEqual([
-      { recipient: person.email },
-    ]);
+    expect(
+      await stored(
+        "select distinct recipient from outbox where recipient like '%vale%' or recipient like '%evil%'",
+      ),
+    ).toEqual([{ recipient: person.email }]);
   });
 
   it("builds its link from the configured address", async () => {
     const person = await makePerson("Ida Frost");
     await requestPasswordReset(visitor(), { email: person.email });
-    const [letter] = await stored<{ body: string }>("select body from outbox where recipient = $1", [person.email]);
+    const [letter] = await stored<{ body: string }>("select body from outbox where recipient = $1", [
+      person.email,
+    ]);
     expect(letter?.body).toContain(`${process.env.APP_ORIGIN}/reset/`);
   });
 });

@@ -10,7 +10,10 @@ import { asSuperuser, lookInto, makePerson, PASSWORD, refusalOf, stored, visitor
 
 let address = 10;
 /** A place nobody has come from yet. */
-const elsewhere = () => `10.0.0.${(address += 1)}`;
+const elsewhere = () => {
+  address += 1;
+  return `10.0.0.${address}`;
+};
 const attempt = (email: string, password: string, from = elsewhere()) =>
   signIn({ email, password, address: from, requestId: "test" });
 const held = ({ id, sessionVersion, sessionId }: NewSession) => ({ personId: id, sessionVersion, sessionId });
@@ -25,7 +28,9 @@ describe("signing in", () => {
     const session = await attempt("  ADA.Thorne@example.test", PASSWORD);
     expect(session.id).toBe(person.id);
     expect(await sessionHolder(held(session))).toEqual(person);
-    expect(await stored("select verb from site_event where person_id = $1", [person.id])).toEqual([{ verb: "account:sign-in" }]);
+    expect(await stored("select verb from site_event where person_id = $1", [person.id])).toEqual([
+      { verb: "account:sign-in" },
+    ]);
   });
 
   it("refuses a wrong password, an absent account, a shut one and one without a password in the same words", async () => {
@@ -41,7 +46,12 @@ describe("signing in", () => {
         attempt("cara.noble@example.test", ""),
         attempt("dan.shaw@example.test", PASSWORD),
         attempt('"a@evil.example"@example.test', PASSWORD),
-      ].map((tried) => tried.then(() => "signed in", (error: Error) => error.message)),
+      ].map((tried) =>
+        tried.then(
+          () => "signed in",
+          (error: Error) => error.message,
+        ),
+      ),
     );
     expect(new Set(messages)).toEqual(new Set(["E-mail or password is not right."]));
   });
@@ -57,8 +67,10 @@ describe("signing in", () => {
     const absent: number[] = [];
     // Interleaved, and cleared in between, so that neither side meets another machine or the throttle.
     for (let round = 0; round < 40; round += 1) {
-      if (round % 2 === 0) present.push(await time("eve.marsh@example.test"), await time("eve.marsh@example.test"));
-      else absent.push(await time(`nobody.${round}@example.test`), await time(`nobody.${round}@example.test`));
+      if (round % 2 === 0)
+        present.push(await time("eve.marsh@example.test"), await time("eve.marsh@example.test"));
+      else
+        absent.push(await time(`nobody.${round}@example.test`), await time(`nobody.${round}@example.test`));
       await asSuperuser((db) => db.query("delete from sign_in_attempt where account like 'eve%'"));
     }
     const median = (times: number[]) => times.sort((a, b) => a - b)[Math.floor(times.length / 2)] ?? 0;
@@ -70,13 +82,16 @@ describe("signing in", () => {
 
 describe("guessing", () => {
   it("waits longer each time, a minute at most", () => {
-    expect([4, 5, 6, 7, 10, 11, 500].map((failures) => wait_s(failures, 5))).toEqual([0, 1, 2, 4, 32, 60, 60]);
+    expect([4, 5, 6, 7, 10, 11, 500].map((failures) => wait_s(failures, 5))).toEqual([
+      0, 1, 2, 4, 32, 60, 60,
+    ]);
   });
 
   it("is slowed for the account, from however many places it comes", async () => {
     await makePerson("Finn Lowe");
     const outcomes = [];
-    for (let n = 0; n < 20; n += 1) outcomes.push((await refusalOf(attempt("finn.lowe@example.test", `guess ${n}`))).code);
+    for (let n = 0; n < 20; n += 1)
+      outcomes.push((await refusalOf(attempt("finn.lowe@example.test", `guess ${n}`))).code);
     expect(outcomes.slice(0, 10)).toEqual(Array(10).fill("signed-out"));
     expect(outcomes.slice(10)).toContain("throttled");
   });
@@ -106,7 +121,9 @@ describe("guessing", () => {
     await makePerson("Ida Frost");
     for (let n = 0; n < 11; n += 1) await attempt("ida.frost@example.test", `guess ${n}`).catch(() => {});
     await asSuperuser((db) =>
-      db.query("update sign_in_attempt set at = at - interval '61 seconds' where account = 'ida.frost@example.test'"),
+      db.query(
+        "update sign_in_attempt set at = at - interval '61 seconds' where account = 'ida.frost@example.test'",
+      ),
     );
     expect((await attempt("ida.frost@example.test", PASSWORD)).name).toBe("Ida Frost");
   });
@@ -115,7 +132,10 @@ describe("guessing", () => {
     await makePerson("Jon Reed");
     const codes = await Promise.all(
       Array.from({ length: 40 }, (_, n) =>
-        attempt("jon.reed@example.test", `guess ${n}`).then(() => "in", (error: { code: string }) => error.code),
+        attempt("jon.reed@example.test", `guess ${n}`).then(
+          () => "in",
+          (error: { code: string }) => error.code,
+        ),
       ),
     );
     expect(codes.filter((code) => code === "signed-out").length).toBeLessThanOrEqual(12);
@@ -135,7 +155,10 @@ describe("a session", () => {
 
   it("ends everywhere when the person says so", async () => {
     const person = await makePerson("Lea Moss");
-    const sessions = [await attempt("lea.moss@example.test", PASSWORD), await attempt("lea.moss@example.test", PASSWORD)];
+    const sessions = [
+      await attempt("lea.moss@example.test", PASSWORD),
+      await attempt("lea.moss@example.test", PASSWORD),
+    ];
     await signOutEverywhere(visitor(person));
     for (const session of sessions) expect(await sessionHolder(held(session))).toBeNull();
   });
@@ -152,7 +175,10 @@ describe("a session", () => {
 
   it("survives a new password in the browser that set it, and ends in the others", async () => {
     const person = await makePerson("Oda Birch");
-    const [here, there] = [await attempt("oda.birch@example.test", PASSWORD), await attempt("oda.birch@example.test", PASSWORD)];
+    const [here, there] = [
+      await attempt("oda.birch@example.test", PASSWORD),
+      await attempt("oda.birch@example.test", PASSWORD),
+    ];
     await changePassword(visitor(person, { sessionId: here.sessionId }), {
       currentPassword: PASSWORD,
       password: "otter under the bridge",
@@ -166,7 +192,10 @@ describe("a session", () => {
   it("keeps the old password when the one asked for is wrong", async () => {
     const person = await makePerson("Pia Stone");
     const refusal = await refusalOf(
-      changePassword(visitor(person), { currentPassword: "something else", password: "otter under the bridge" }),
+      changePassword(visitor(person), {
+        currentPassword: "something else",
+        password: "otter under the bridge",
+      }),
     );
     expect(refusal.fields).toHaveProperty("currentPassword");
     expect((await attempt("pia.stone@example.test", PASSWORD)).id).toBe(person.id);
@@ -195,7 +224,12 @@ describe("a session", () => {
     const session = await attempt("sol.brook@example.test", PASSWORD);
     await age("seen_at = now() - interval '1 hour'", session);
     const seen = async () =>
-      (await stored<{ recent: boolean }>("select seen_at > now() - interval '1 minute' as recent from person_session where id = $1", [session.sessionId]))[0]?.recent;
+      (
+        await stored<{ recent: boolean }>(
+          "select seen_at > now() - interval '1 minute' as recent from person_session where id = $1",
+          [session.sessionId],
+        )
+      )[0]?.recent;
     await sessionHolder(held(session), false);
     expect(await seen()).toBe(false);
     await sessionHolder(held(session));

@@ -14,13 +14,26 @@ beforeAll(async () => {
   lookInto((await freshDatabase()).superuserUrl);
   site = await makeSite("C-01");
   neighbour = await makeSite("C-02");
-  for (const [n, client] of ["Harbour board", "Ligne brisée\nsur deux", 'Quotes "and" \\ signs', "Σ ≤ √", ""].entries())
+  for (const [n, client] of [
+    "Harbour board",
+    "Ligne brisée\nsur deux",
+    'Quotes "and" \\ signs',
+    "Σ ≤ √",
+    "",
+  ].entries())
     await changeProject(site.lead, { client: client.replace("\n", " "), revision: n + 1 });
-  await inProject(site.lead, (tx) => audit(tx, site.lead, { verb: "note", subject: "a\nb", detail: { text: "two\nlines" } }));
+  await inProject(site.lead, (tx) =>
+    audit(tx, site.lead, { verb: "note", subject: "a\nb", detail: { text: "two\nlines" } }),
+  );
 });
 
 const verified = async () =>
-  Object.fromEntries(await inEachProject(async (tx, { id, number }) => [number, (await verifyProject(tx, id)).broken?.what ?? "unbroken"] as const));
+  Object.fromEntries(
+    await inEachProject(
+      async (tx, { id, number }) =>
+        [number, (await verifyProject(tx, id)).broken?.what ?? "unbroken"] as const,
+    ),
+  );
 
 /** Breaks the record as somebody with every right could, looks, and puts it back. */
 async function broken(break_: string, mend: string, values: unknown[]): Promise<Record<string, string>> {
@@ -38,7 +51,9 @@ async function broken(break_: string, mend: string, values: unknown[]): Promise<
 describe("the audit chain", () => {
   it("is recomputed outside the database to the same hashes", async () => {
     expect(await verified()).toEqual({ "C-01": "unbroken", "C-02": "unbroken" });
-    expect((await stored("select 1 from audit_event where project_id = $1", [site.projectId])).length).toBeGreaterThanOrEqual(6);
+    expect(
+      (await stored("select 1 from audit_event where project_id = $1", [site.projectId])).length,
+    ).toBeGreaterThanOrEqual(6);
   });
 
   it("stays one chain when many write at once", async () => {
@@ -51,10 +66,30 @@ describe("the audit chain", () => {
   });
 
   for (const [what, break_, mend, said] of [
-    ["a word of an event is altered", "update audit_event set detail = detail || ' ' where project_id = $1 and seq = 3", "update audit_event set detail = rtrim(detail) where project_id = $1 and seq = 3", "event 3 is not what was written"],
-    ["an event is put down to somebody else", "update audit_event set actor_id = project_id where project_id = $1 and seq = 2", "update audit_event set actor_id = (select actor_id from audit_event e where e.project_id = $1 and e.seq = 3) where project_id = $1 and seq = 2", "event 2 is not what was written"],
-    ["a moment is moved by a microsecond", "update audit_event set at = at + interval '1 microsecond' where project_id = $1 and seq = 4", "update audit_event set at = at - interval '1 microsecond' where project_id = $1 and seq = 4", "event 4 is not what was written"],
-    ["an event is taken out", "update audit_event set seq = -2 where project_id = $1 and seq = 2", "update audit_event set seq = 2 where project_id = $1 and seq = -2", "event 2 is missing: the next one is 3"],
+    [
+      "a word of an event is altered",
+      "update audit_event set detail = detail || ' ' where project_id = $1 and seq = 3",
+      "update audit_event set detail = rtrim(detail) where project_id = $1 and seq = 3",
+      "event 3 is not what was written",
+    ],
+    [
+      "an event is put down to somebody else",
+      "update audit_event set actor_id = project_id where project_id = $1 and seq = 2",
+      "update audit_event set actor_id = (select actor_id from audit_event e where e.project_id = $1 and e.seq = 3) where project_id = $1 and seq = 2",
+      "event 2 is not what was written",
+    ],
+    [
+      "a moment is moved by a microsecond",
+      "update audit_event set at = at + interval '1 microsecond' where project_id = $1 and seq = 4",
+      "update audit_event set at = at - interval '1 microsecond' where project_id = $1 and seq = 4",
+      "event 4 is not what was written",
+    ],
+    [
+      "an event is taken out",
+      "update audit_event set seq = -2 where project_id = $1 and seq = 2",
+      "update audit_event set seq = 2 where project_id = $1 and seq = -2",
+      "event 2 is missing: the next one is 3",
+    ],
   ] as const)
     it(`shows where ${what}, and only in that project`, async () => {
       expect(await broken(break_, mend, [site.projectId])).toEqual({ "C-01": said, "C-02": "unbroken" });
@@ -73,7 +108,12 @@ describe("the audit chain", () => {
 
 describe("the invariants", () => {
   const findings = async () =>
-    Object.fromEntries(await inEachProject(async (tx, { id, number }) => [number, (await brokenIn(tx, id)).map((finding) => finding.id)] as const));
+    Object.fromEntries(
+      await inEachProject(
+        async (tx, { id, number }) =>
+          [number, (await brokenIn(tx, id)).map((finding) => finding.id)] as const,
+      ),
+    );
 
   it("hold in projects made by the verbs", async () => {
     expect(await findings()).toEqual({ "C-01": [], "C-02": [] });
