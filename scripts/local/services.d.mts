@@ -1,7 +1,7 @@
 export function ensureServices(
   use: "demo" | "test",
   options?: { given?: Record<string, string | undefined>; origin?: string },
-): Promise<{ env: ServiceEnvironment; made: string[] }>;
+): Promise<{ env: ServiceEnvironment; started: string[] }>;
 
 export type ServiceEnvironment = Record<
   | "DATABASE_URL"

@@ -81,7 +81,11 @@ async function storeEnv(use, given, origin, started) {
     };
     await ensureBucket(store);
   } else {
-    store = await ensureStore({ name: uses[use].store, bucket: uses[use].bucket, origin });
+    store = await ensureStore({
+      name: uses[use].store,
+      bucket: uses[use].bucket,
+      origin: origin ?? usualOrigin(use),
+    });
     if (store.started) started.push(uses[use].store);
   }
   return {
@@ -112,6 +116,9 @@ export async function endServices(names) {
 export const serviceNames = [...Object.values(uses).flatMap(({ store, mail }) => [store, mail]), "postgres"];
 
 const firstPort = { demo: 3000, dev: 3100, test: 3400 };
+
+/** The address that a use is served at when its first port is free. */
+const usualOrigin = (use) => `http://127.0.0.1:${firstPort[use]}`;
 
 /** The address to serve at: the port it had last time if that is free, or else the first free one from the usual. */
 export async function chooseOrigin(use, given = givenEnvironment()) {

@@ -21,7 +21,7 @@ export async function ensureStore({ name, bucket, origin }) {
   const keys = { accessKey: "holdground:app", secretKey: secret(name) };
   const before = running(name);
   const origins = before?.origins ?? [];
-  const admitted = !origin || origins.includes(origin);
+  const admitted = origins.includes(origin);
   const there = before && admitted && (await answers(before.port));
   // Pages of another address (npm run dev beside npm start) are let in as well; the last few are remembered.
   const wanted = admitted ? origins : [origin, ...origins].slice(0, 4);
@@ -43,7 +43,7 @@ async function startStore(name, keys, origins) {
     HOLDGROUND_S3_PORT: String(port),
     HOLDGROUND_S3_ACCESS_KEY: keys.accessKey,
     HOLDGROUND_S3_SECRET_KEY: keys.secretKey,
-    HOLDGROUND_S3_ORIGINS: origins.join(",") || "http://127.0.0.1:3000",
+    HOLDGROUND_S3_ORIGINS: origins.join(","),
   };
   const script = join(import.meta.dirname, "s3.py");
   const started = startDetached(name, python, ["-I", script], { env, facts: { port, origins } });

@@ -1,4 +1,5 @@
 import type { TestProject } from "vitest/node";
+import { givenEnvironment } from "@/scripts/local/given.mjs";
 import { ensureServices, type ServiceEnvironment } from "@/scripts/local/services.mjs";
 import {
   clearLeftovers,
@@ -15,6 +16,8 @@ declare module "vitest" {
     environment: ServiceEnvironment & { NEXTAUTH_URL: string; APP_ORIGIN: string };
     /** The migrated database that every test file gets a copy of. */
     template: string;
+    /** Which services this checkout has made itself; the others were named by the environment. */
+    own: { database: boolean; store: boolean };
   }
 }
 
@@ -31,5 +34,7 @@ export default async function setup(project: TestProject): Promise<() => Promise
   const origin = "http://127.0.0.1:3400";
   project.provide("environment", { ...env, NEXTAUTH_URL: origin, APP_ORIGIN: origin });
   project.provide("template", template);
+  const given = givenEnvironment();
+  project.provide("own", { database: !given.DATABASE_URL, store: !given.S3_ENDPOINT });
   return () => dropDatabases(env.DATABASE_ADMIN_URL, run);
 }

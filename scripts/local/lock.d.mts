@@ -1,0 +1,5 @@
+export function oneAtATime<Result>(
+  name: string,
+  act: () => Promise<Result>,
+  options?: { patience_ms?: number },
+): Promise<Result>;
