@@ -2,6 +2,7 @@
  * Recomputes the audit chain of every project and names the first link that does not hold. Ends with 1 when one is
  * broken. The heads it prints are worth keeping outside the database: a trail cut short at its end shows by them alone.
  */
+import "./local/environment";
 import { closeClient } from "@/db/client";
 import { inEachProject, verifyProject } from "@/lib/services/record/audit-chain";
 

@@ -14,8 +14,14 @@ async function main() {
       () => end("app-dev"),
       () => "ended",
     );
-  const { env, port } = await prepare("dev");
-  process.exitCode = await serve({ name: "app-dev", command: "dev", port, env, started: () => tell(env) });
+  const { env, port, demo } = await prepare("dev");
+  process.exitCode = await serve({
+    name: "app-dev",
+    command: "dev",
+    port,
+    env,
+    started: () => tell(env, demo),
+  });
 }
 
 await main().catch(giveUp);

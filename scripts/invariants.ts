@@ -1,4 +1,5 @@
 /** Asks the database for everything that must hold in every project; prints what does not. Ends with 1 when something is broken. */
+import "./local/environment";
 import { closeClient } from "@/db/client";
 import { inEachProject } from "@/lib/services/record/audit-chain";
 import { brokenIn, invariants } from "@/lib/services/record/invariants";

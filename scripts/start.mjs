@@ -17,7 +17,7 @@ async function main() {
   if (before) {
     if (before.sources === sourcesHash() && (await isServed(before.port))) {
       console.log("  It runs already, made of these very sources.");
-      return tell(readLocal("env.json"));
+      return tell(readLocal("env.json"), before.demo);
     }
     await step(
       "The register of an earlier start",
@@ -25,11 +25,18 @@ async function main() {
       () => "ended",
     );
   }
-  const { env, port } = await prepare("demo");
+  const { env, port, demo } = await prepare("demo");
   const sources = sourcesHash();
   await step("Build", () => ensureBuild());
-  const started = () => tell(env);
-  process.exitCode = await serve({ name: "app", command: "start", port, env, facts: { sources }, started });
+  const started = () => tell(env, demo);
+  process.exitCode = await serve({
+    name: "app",
+    command: "start",
+    port,
+    env,
+    facts: { sources, demo },
+    started,
+  });
 }
 
 await main().catch(giveUp);

@@ -31,7 +31,7 @@ export async function prepare(use) {
   await step("Demonstration project", () =>
     foreign ? "left out of a database given from outside; HOLDGROUND_DEMO=1 puts it in" : ensureDemo(env),
   );
-  return { env, port };
+  return { env, port, demo: !foreign };
 }
 
 /** A step whose outcome is a piece of environment: its first variable says where the service is, without passwords. */
@@ -40,10 +40,10 @@ export function withPlace(title, act) {
 }
 
 /** Says where the register is served, where its mail goes, and who may sign in. */
-export function tell(env) {
+export function tell(env, demo) {
   console.log(`\nHoldground is served at ${env.APP_ORIGIN}`);
   if (env.MAIL_SINK_URL) console.log(`Its mail is kept and shown at ${env.MAIL_SINK_URL}`);
-  const lines = accountLines();
+  const lines = demo ? accountLines() : [];
   if (lines.length > 0) console.log(`Accounts of the demonstration:\n${lines.join("\n")}`);
   console.log("Ctrl-C ends the register; npm stop also ends the database, the store and the mail sink.\n");
 }
