@@ -4,8 +4,15 @@ import { getSignedUrl } from "@aws-sdk/s3-request-presigner";
 import { createTransport } from "nodemailer";
 import { describe, expect, inject, it } from "vitest";
 import { local, readLocal } from "@/scripts/local/folders.mjs";
+import { onServer } from "@/scripts/local/postgres.mjs";
 import { ensureServices } from "@/scripts/local/services.mjs";
-import { dropDatabase } from "@/scripts/local/test-databases.mjs";
+import {
+  clearLeftovers,
+  dropDatabase,
+  dropDatabases,
+  makeDatabase,
+  runName,
+} from "@/scripts/local/test-databases.mjs";
 
 const environment = inject("environment");
 const own = inject("own");
@@ -123,6 +130,23 @@ describe.runIf(own.store && own.database)("what is kept of the services", () => 
 
   it("never drops a database that no test run here has made", async () => {
     await expect(dropDatabase(environment.DATABASE_ADMIN_URL, "holdground")).rejects.toThrow(/it stays/);
+  });
+});
+
+describe("databases that a killed test run has left", () => {
+  it("are dropped by the next run, and those of a running one stay", async () => {
+    const { DATABASE_ADMIN_URL: admin, DATABASE_OWNER_URL: owner } = environment;
+    // No process has this number: Linux gives none above 4,194,304.
+    const left = `${runName().replace(/_\d+_\d+$/, "")}_4194305_1_left`;
+    const live = `${runName()}_live`;
+    await makeDatabase(admin, left, owner);
+    await makeDatabase(admin, live, owner);
+    await clearLeftovers(admin);
+    const { rows } = await onServer(admin, (client) =>
+      client.query("select datname from pg_database where datname = any($1)", [[left, live]]),
+    );
+    expect(rows).toEqual([{ datname: live }]);
+    await dropDatabases(admin, runName());
   });
 });
 
