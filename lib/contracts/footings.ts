@@ -306,7 +306,12 @@ export type FootingCounts = {
   affected: number;
   unlinked: number;
 };
-export type FootingList = { items: FootingItem[]; next: string | null; counts: FootingCounts };
+export type FootingList = {
+  items: FootingItem[];
+  next: string | null;
+  /** Of all that match, on the first page alone. */
+  counts: FootingCounts | null;
+};
 
 export type FootingGeometry = {
   number: number;
