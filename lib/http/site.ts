@@ -68,7 +68,8 @@ async function handled(
 ): Promise<Response> {
   const requestId = randomUUID();
   try {
-    const { ids } = pathIds(await route.params);
+    // A route without a name in brackets has no parameters at all.
+    const { ids } = pathIds((await route.params) ?? {});
     return await act({ ...(await visitorOf(request.headers)), requestId }, ids);
   } catch (error) {
     return refusal(error, request, requestId);
