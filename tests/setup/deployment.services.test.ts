@@ -96,6 +96,11 @@ describe("compose.yaml and Dockerfile", () => {
       from.split(" "),
     );
     expect(copies.length).toBeGreaterThan(3);
+    const built = /^(\.next|node_modules)$/;
+    const carried = [...dockerfile.matchAll(/^COPY --from=\w+ \/register\/(\S+)/gm)].map(
+      ([, path = ""]) => path,
+    );
+    for (const path of carried) expect(built.test(path) || existsSync(at(path)), path).toBe(true);
     for (const path of copies) expect(existsSync(at(path)), path).toBe(true);
   });
 
