@@ -44,7 +44,7 @@ export async function recordChange(
   const changeId = randomUUID() as ChangeId;
   const touched = touchedBy(context, given);
   const byOwner = alters[given.kind]
-    ? await recordConsequences(tx, context, { changeId, footings: { where: touched } })
+    ? await recordConsequences(tx, context, { changeId, checked: touched })
     : await keepVerdicts(tx, context, changeId, touched);
   const counts = total(byOwner);
   if (Object.values(counts).every((count) => count === 0)) return null;
@@ -79,18 +79,18 @@ export async function insertChange(
   });
 }
 
-/** The condition on `footing f` (with its latest check `c`) that holds for the footings a change touches. */
+/** The condition on `footing f` (with its last check `k`) that holds for the footings a change touches. */
 function touchedBy(context: Context, given: UpstreamChange): SQL {
   if (given.footingIds) return sql`f.id = any(${sql.param([...given.footingIds])}::uuid[])`;
   const project = context.projectId;
   switch (given.kind) {
     case "document-superseded":
-      return sql`c.value_revision_id in (
+      return sql`k.value_revision_id in (
         select s.value_revision_id from value_source s
         join document_revision d on d.project_id = s.project_id and d.id = s.document_revision_id
         where s.project_id = ${project} and d.document_id = ${given.subjectId})`;
     case "hole-revised":
-      return sql`c.hole_revision_ids && array(
+      return sql`k.hole_revision_ids && array(
         select r.id from hole_revision r where r.project_id = ${project} and r.hole_id = ${given.subjectId})`;
     case "zone-redrawn":
       return sql`f.value_id in (
@@ -116,11 +116,11 @@ async function keepVerdicts(
     with written as (
       insert into consequence (project_id, change_id, footing_id, check_id, outcome, verdict_before, verdict_after,
         utilisation_before, utilisation_after, required_net_kpa, stage)
-      select f.project_id, ${changeId}, f.id, c.id,
-        case c.verdict when 'passes' then 'holds' when 'fails' then 'still fails' else 'outside conditions' end,
-        c.verdict, c.verdict, c.utilisation, c.utilisation, c.required_net_kpa, f.stage
+      select f.project_id, ${changeId}, f.id, k.id,
+        case k.verdict when 'passes' then 'holds' when 'fails' then 'still fails' else 'outside conditions' end,
+        k.verdict, k.verdict, k.utilisation, k.utilisation, k.required_net_kpa, f.stage
       from footing f
-      join footing_check c on c.project_id = f.project_id and c.id = f.latest_check_id
+      join footing_check k on k.project_id = f.project_id and k.id = f.latest_check_id
       where f.project_id = ${context.projectId} and ${touched}
       returning footing_id, outcome)
     select f.owner_id as owner, w.outcome, count(*)::int as count

@@ -1,12 +1,12 @@
 import { type SQL, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { Outcome, Verdict } from "@/db/schema";
-import { checkFooting } from "@/lib/check/check-footing";
-import type { ChangeId, CheckId, FootingId, ValueId, ValueRevisionId } from "@/lib/contracts/ids";
+import type { ChangeId, CheckId, FootingId, ValueId } from "@/lib/contracts/ids";
 import type { Context } from "../context";
 import { faultPoint } from "../faults";
 import { type TallyByOwner, tally } from "./announce";
 import { gatherLinked } from "./gather-linked";
+import { judge, WITHOUT_VALUE } from "./judge";
 import { outcomeOf } from "./outcome";
 
 /** The columns of the consequences of one batch, each an array: what goes to the database in one statement. */
@@ -24,45 +24,39 @@ type Batch = {
 
 /**
  * Runs the check of every footing that a change touches with what is new, and stores what it did to each: load, think,
- * store, a batch at a time, so that memory stays flat. Call it when the pointers have moved; nothing else is read.
+ * store, a batch at a time, so that memory stays flat. Call it when the pointers have moved; nothing else is read. Either
+ * the footings linked to a value, checked before or not, or those with a check that a condition on `f` and `k` selects.
  */
 export async function recordConsequences(
   tx: Transaction,
   context: Context,
-  given: { changeId: ChangeId } & (
-    | { value: { valueId: ValueId; revisionId: ValueRevisionId } }
-    | { footings: { where: SQL } }
-  ),
+  given: { changeId: ChangeId } & ({ valueId: ValueId } | { checked: SQL }),
 ): Promise<TallyByOwner> {
   const byOwner: TallyByOwner = new Map();
   const touched =
-    "value" in given
-      ? sql`f.value_id = ${given.value.valueId}`
-      : sql`c.id is not null and ${given.footings.where}`;
-  for await (const footings of gatherLinked(tx, context, touched)) {
+    "valueId" in given ? sql`f.value_id = ${given.valueId}` : sql`k.id is not null and ${given.checked}`;
+  for await (const { footings, criteria, termsOf } of gatherLinked(tx, context, touched)) {
     const batch = emptyBatch();
     for (const footing of footings) {
-      const after = footing.input ? checkFooting(footing.input) : WITHOUT_VALUE;
-      const outcome = outcomeOf(footing.before?.verdict ?? null, after.verdict);
+      const terms = termsOf(footing);
+      const after = terms ? judge(footing, terms, criteria) : WITHOUT_VALUE;
+      const outcome = outcomeOf(footing.verdict, after.verdict);
       batch.footingId.push(footing.id);
-      batch.checkId.push(footing.before?.id ?? null);
+      batch.checkId.push(footing.checkId);
       batch.outcome.push(outcome);
-      batch.verdictBefore.push(footing.before?.verdict ?? null);
+      batch.verdictBefore.push(footing.verdict);
       batch.verdictAfter.push(after.verdict);
-      batch.utilisationBefore.push(footing.before?.utilisation ?? null);
+      batch.utilisationBefore.push(footing.utilisation);
       batch.utilisationAfter.push(after.utilisation);
       batch.requiredNet_kPa.push(after.requiredNet_kPa);
       batch.stage.push(footing.stage);
       tally(byOwner, footing.ownerId, outcome);
     }
     await store(tx, context, given.changeId, batch);
-    await faultPoint("issue:batch");
+    await faultPoint("consequences:batch");
   }
   return byOwner;
 }
-
-/** A footing whose value has no revision in force is inside nobody's conditions. */
-const WITHOUT_VALUE = { verdict: "outside conditions", utilisation: null, requiredNet_kPa: null } as const;
 
 const emptyBatch = (): Batch => ({
   footingId: [],

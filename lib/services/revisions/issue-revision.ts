@@ -41,7 +41,7 @@ export async function issueRevision(context: Context, given: IssueRevisionInput)
 
     const next = await moveCurrentTo(tx, context, value, wanted);
     const changeId = randomUUID() as ChangeId;
-    const byOwner = await recordConsequences(tx, context, { changeId, value: { valueId, revisionId } });
+    const byOwner = await recordConsequences(tx, context, { changeId, valueId });
     const counts = total(byOwner);
     await faultPoint("issue:consequences");
     const title = titleOf(value, wanted, inForce);

@@ -154,14 +154,12 @@ async function insertSources(
 ): Promise<void> {
   const sources = content.sources ?? [];
   if (sources.length === 0) return;
-  await tx
-    .insert(t.valueSource)
-    .values(
-      sources.map((source, at) => ({
-        ...source,
-        projectId: context.projectId,
-        valueRevisionId,
-        ordinal: at + 1,
-      })),
-    );
+  await tx.insert(t.valueSource).values(
+    sources.map((source, at) => ({
+      ...source,
+      projectId: context.projectId,
+      valueRevisionId,
+      ordinal: at + 1,
+    })),
+  );
 }

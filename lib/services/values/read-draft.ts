@@ -11,7 +11,28 @@ export type DraftReading = {
   findings: DraftFinding[];
   /** The net pressure as far as it can be read, whatever else is missing. */
   netAllowable_kPa: number | null;
+  /** What a check would read of it, each as far as nothing is wrong with it. */
+  terms: Partial<DraftTerms>;
 };
+
+export type DraftTerms = Pick<StatedFields, (typeof termNames)[number]>;
+
+const ranges = [
+  "groundwaterLevel_m",
+  "minBreadth_m",
+  "maxBreadth_m",
+  "minFoundingDepth_m",
+  "highestFoundingLevel_m",
+  "lowestFoundingLevel_m",
+] as const;
+const termNames = [
+  "comparedWith",
+  "loadBasis",
+  "soilUnitWeight_kNm3",
+  "transientFactor",
+  "accidentalFactor",
+  ...ranges,
+] as const;
 
 type Bounds = { least: number; most: number; open?: boolean; unit: string };
 type Problems = Record<string, string>;
@@ -89,7 +110,18 @@ export function readDraft(draft: DraftContent, ground: { soil: string; today: st
     problems,
     findings,
     netAllowable_kPa: pressure.net_kPa,
+    terms: readable(fields, problems),
   };
+}
+
+/** Fields that can be used as they stand; an empty range is a term too, an empty choice is not. */
+function readable(fields: Record<string, unknown>, problems: Problems): Partial<DraftTerms> {
+  const empty: readonly string[] = ranges;
+  return Object.fromEntries(
+    termNames
+      .filter((name) => !(name in problems) && (fields[name] !== null || empty.includes(name)))
+      .map((name) => [name, fields[name]]),
+  );
 }
 
 function take(problems: Problems, name: string, read: Read, bounds: Bounds, missing?: string): number | null {
