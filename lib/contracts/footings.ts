@@ -228,7 +228,13 @@ export const previewFootingImportInput = z.strictObject(file);
 export const acceptFootingImportInput = z.strictObject({ ...file, ...acceptance });
 const basisOfFile = { loadBasis: loadsFields.loadBasis, source: loadsFields.source };
 export const previewLoadImportInput = z.strictObject({ ...file, ...basisOfFile });
-export const acceptLoadImportInput = z.strictObject({ ...file, ...basisOfFile, ...acceptance });
+/** A file of loads with an error is refused whole: without the row in error a footing would be checked for too little. */
+export const acceptLoadImportInput = z.strictObject({
+  ...file,
+  ...basisOfFile,
+  fingerprint: acceptance.fingerprint,
+  reason: acceptance.reason,
+});
 
 export type CreateFootingInput = z.input<typeof createFootingInput>;
 export type EditFootingInput = z.input<typeof editFootingInput>;
