@@ -16,6 +16,8 @@ export function client(): { pool: pg.Pool; database: Database } {
     const pool = new pg.Pool({ connectionString: url, max: 12, connectionTimeoutMillis: 5_000 });
     // An idle connection that the server ends is replaced at the next use; without a listener it would end the process.
     pool.on("error", () => {});
+    // One that is cut while a transaction has it: the next query fails and tells; the bare event would end the process.
+    pool.on("connect", (connection) => connection.on("error", () => {}));
     kept.holdgroundDatabase = { url, pool, database: drizzle({ client: pool, schema }) };
   }
   return kept.holdgroundDatabase;

@@ -1,9 +1,11 @@
 import type { Verdict } from "@/db/schema";
-import { checkFooting } from "@/lib/check/check-footing";
 import type { GatheredCriteria, GatheredFooting, ValueTerms } from "../checks/gather";
-import { type CheckedTerms, toCheckInput } from "../checks/to-input";
+import { runCheck, snapshotOf } from "../checks/run-check";
 
 export type Judged = { verdict: Verdict; utilisation: number | null; requiredNet_kPa: number | null };
+
+/** What a check reads of a value revision, or of a draft that would be one. */
+export type JudgedTerms = Omit<ValueTerms, "valueId" | "valueRevisionId" | "zoneId">;
 
 /** A footing whose value has no revision in force is inside nobody's conditions. */
 export const WITHOUT_VALUE: Judged = {
@@ -13,11 +15,9 @@ export const WITHOUT_VALUE: Judged = {
 };
 
 /** The verdict of a footing's check against these terms, as a stored check of it would have it. */
-export function judge(
-  footing: GatheredFooting,
-  terms: CheckedTerms & Pick<ValueTerms, "loadBasis" | "highestFoundingLevel_m" | "lowestFoundingLevel_m">,
-  criteria: GatheredCriteria,
-): Judged {
-  const input = toCheckInput({ ...footing, combinations: footing.combinations ?? "[]" }, terms, criteria);
-  return checkFooting(input);
+export function judge(footing: GatheredFooting, terms: JudgedTerms, criteria: GatheredCriteria): Judged {
+  const { combinations, loadBasis } = footing;
+  if (combinations === null || loadBasis === null) throw new Error(`${footing.mark} has no loads to judge.`);
+  // Holes near a footing are a remark of the check, never its verdict: they are not looked for here.
+  return runCheck(snapshotOf({ ...footing, combinations, loadBasis }, terms, criteria, null));
 }

@@ -4,9 +4,8 @@ import type { Outcome } from "@/db/schema";
 import type { RevisionPreview } from "@/lib/contracts/changes";
 import type { FootingId, ValueId } from "@/lib/contracts/ids";
 import { gatherLinked, type LinkedBatch } from "../changes/gather-linked";
-import { judge } from "../changes/judge";
+import { type JudgedTerms, judge } from "../changes/judge";
 import { needsAction, noCounts, outcomeOf } from "../changes/outcome";
-import type { ValueTerms } from "../checks/gather";
 import type { Context } from "../context";
 
 export type PreviewAt = {
@@ -15,20 +14,6 @@ export type PreviewAt = {
   valueId: ValueId;
   currentNet_kPa: number | null;
 };
-
-/** What a check reads of a draft. */
-export type TrialTerms = Omit<
-  ValueTerms,
-  | "valueId"
-  | "valueRevisionId"
-  | "reference"
-  | "code"
-  | "zoneId"
-  | "basis"
-  | "purpose"
-  | "confirmBy"
-  | "confirmWho"
->;
 
 /** How many points the curve has at most, and how many footings are named. */
 export const CURVE_POINTS = 200;
@@ -43,7 +28,7 @@ export type Seen = {
 };
 
 /** The preview by running every linked check with the draft's terms. Reads in batches, writes nothing. */
-export async function previewByRunning(at: PreviewAt, trial: TrialTerms): Promise<RevisionPreview> {
+export async function previewByRunning(at: PreviewAt, trial: JudgedTerms): Promise<RevisionPreview> {
   const { tx, context, valueId, currentNet_kPa } = at;
   const seen = await runTrial(gatherLinked(tx, context, sql`f.value_id = ${valueId}`), trial);
   seen.required.sort((a, b) => b.requiredNet_kPa - a.requiredNet_kPa || (a.mark < b.mark ? -1 : 1));
@@ -69,7 +54,7 @@ export async function previewByRunning(at: PreviewAt, trial: TrialTerms): Promis
 }
 
 /** Runs gathered footings and counts what the terms did to each. */
-export async function runTrial(batches: AsyncIterable<LinkedBatch>, trial: TrialTerms) {
+export async function runTrial(batches: AsyncIterable<LinkedBatch>, trial: JudgedTerms) {
   const counts = noCounts();
   const required: { footingId: FootingId; mark: string; requiredNet_kPa: number }[] = [];
   const troubled: Seen[] = [];

@@ -2,16 +2,9 @@ import { type SQL, sql } from "drizzle-orm";
 import type { RevisionPreview } from "@/lib/contracts/changes";
 import type { FootingId } from "@/lib/contracts/ids";
 import { gatherLinked } from "../changes/gather-linked";
+import type { JudgedTerms } from "../changes/judge";
 import { noCounts } from "../changes/outcome";
-import {
-  CURVE_POINTS,
-  NAMED,
-  type PreviewAt,
-  runTrial,
-  type Seen,
-  type TrialTerms,
-  worstFirst,
-} from "./preview-by-running";
+import { CURVE_POINTS, NAMED, type PreviewAt, runTrial, type Seen, worstFirst } from "./preview-by-running";
 
 type Row = {
   linked: number;
@@ -32,7 +25,10 @@ type Row = {
  * but bearing whatever the pressure; those that did not pass, few as a rule, are run again, because something else than
  * bearing may hold them back. Without terms to try only the curve is told.
  */
-export async function previewFromRequired(at: PreviewAt, trial: TrialTerms | null): Promise<RevisionPreview> {
+export async function previewFromRequired(
+  at: PreviewAt,
+  trial: JudgedTerms | null,
+): Promise<RevisionPreview> {
   const { tx, context, valueId, currentNet_kPa } = at;
   const net_kPa = trial?.netAllowable_kPa ?? null;
   const outside = trial ? outsideOf(trial) : sql`false`;
@@ -101,7 +97,7 @@ export async function previewFromRequired(at: PreviewAt, trial: TrialTerms | nul
 }
 
 /** True where a footing `g` lies outside the ranges that the terms state. */
-function outsideOf(trial: TrialTerms): SQL {
+function outsideOf(trial: JudgedTerms): SQL {
   const conditions: SQL[] = [sql`false`];
   if (trial.minBreadth_m !== null)
     conditions.push(sql`least(g.breadth_m, g.length_m) < ${trial.minBreadth_m}::float8`);

@@ -3,13 +3,14 @@ import type { Transaction } from "@/db/client";
 import type { RevisionPreview } from "@/lib/contracts/changes";
 import type { ValueId, ValueRevisionId } from "@/lib/contracts/ids";
 import { previewRevisionInput } from "@/lib/contracts/values";
+import type { JudgedTerms } from "../changes/judge";
 import { gatherTerms } from "../checks/gather";
 import { assertMay, type Context, inProject } from "../context";
 import { NotFound } from "../errors";
 import { parse } from "../parse";
 import type { DraftKept } from "../values/draft-row";
 import { readDraft } from "../values/read-draft";
-import { previewByRunning, type TrialTerms } from "./preview-by-running";
+import { previewByRunning } from "./preview-by-running";
 import { previewFromRequired } from "./preview-from-required";
 
 /**
@@ -61,17 +62,21 @@ async function readState(tx: Transaction, context: Context, valueId: ValueId) {
 function trialOf(
   draft: DraftKept | null,
   ground: { soil: string; today: string },
-  current: TrialTerms | null,
+  current: JudgedTerms | null,
   netAllowable_kPa: number | undefined,
-): TrialTerms | null {
+): JudgedTerms | null {
   const read = draft ? readDraft(draft.fields, ground) : null;
   const stated = read?.terms ?? {};
   const pressure = netAllowable_kPa ?? read?.netAllowable_kPa ?? current?.netAllowable_kPa ?? null;
   const soilUnitWeight_kNm3 = stated.soilUnitWeight_kNm3 ?? current?.soilUnitWeight_kNm3;
   if (pressure === null || soilUnitWeight_kNm3 === undefined) return null;
-  const from = <Name extends keyof TrialTerms>(name: Name, otherwise: TrialTerms[Name]): TrialTerms[Name] =>
-    name in stated ? (stated[name] as TrialTerms[Name]) : (current?.[name] ?? otherwise);
+  const from = <Name extends keyof JudgedTerms>(
+    name: Name,
+    otherwise: JudgedTerms[Name],
+  ): JudgedTerms[Name] => (name in stated ? (stated as JudgedTerms)[name] : (current?.[name] ?? otherwise));
   return {
+    reference: "",
+    code: "draft",
     kind: "single",
     table: null,
     parameters: null,
@@ -87,12 +92,18 @@ function trialOf(
     lowestFoundingLevel_m: from("lowestFoundingLevel_m", null),
     transientFactor: from("transientFactor", 1),
     accidentalFactor: from("accidentalFactor", 1),
+    // Remarks of a check, not its verdict.
+    basis: "recommended",
+    purpose: "preliminary",
+    confirmBy: null,
+    confirmWho: null,
   };
 }
 
 /** What the required value of a footing depends on, as one text: all terms but the pressure and the stated ranges. */
-const demandOf = (terms: TrialTerms): string =>
+const demandOf = (terms: JudgedTerms): string =>
   JSON.stringify([
+    terms.loadBasis,
     terms.comparedWith,
     terms.soilUnitWeight_kNm3,
     terms.groundwaterLevel_m,

@@ -183,6 +183,22 @@ export const completeDraft = (world: World, over: Partial<DraftContent> = {}): D
   ...over,
 });
 
+/** A zone of its own, so that a test meets no other's value. */
+export async function freshPlace(world: World): Promise<{ zoneId: ZoneId; groundUnitId: GroundUnitId }> {
+  const zoneId = randomUUID() as ZoneId;
+  const { groundUnitId, projectId } = world;
+  const drawn = randomUUID();
+  await inside(world, async (tx) => {
+    await tx.execute(sql`insert into zone (project_id, id, name, current_revision_id)
+      values (${projectId}, ${zoneId}, ${`Zone ${zoneId}`}, ${drawn})`);
+    await tx.execute(sql`insert into zone_revision (project_id, id, zone_id, number, ring_m, drawn_by)
+      values (${projectId}, ${drawn}, ${zoneId}, 1, '[[0,0],[1,0],[1,1]]', ${world.preparer.person.id})`);
+    await tx.execute(sql`insert into zone_ground_unit (project_id, zone_id, ground_unit_id)
+      values (${projectId}, ${zoneId}, ${groundUnitId})`);
+  });
+  return { zoneId, groundUnitId };
+}
+
 /** Opens a value; answers its id. */
 export async function openValue(world: World): Promise<ValueId> {
   return (await createValue(world.preparer, { zoneId: world.zoneId, groundUnitId: world.groundUnitId })).id;

@@ -1,7 +1,7 @@
 import { randomUUID } from "node:crypto";
 import { sql } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
-import type { DocumentRevisionId, GroundUnitId, ValueId, ZoneId } from "@/lib/contracts/ids";
+import type { DocumentRevisionId, GroundUnitId, ValueId } from "@/lib/contracts/ids";
 import { plantFault } from "@/lib/services/faults";
 import { checkDraft } from "@/lib/services/values/check-draft";
 import { createValue } from "@/lib/services/values/create-value";
@@ -16,6 +16,7 @@ import {
   checkedRevision,
   completeDraft,
   countOf,
+  freshPlace,
   inside,
   issuedRevision,
   openValue,
@@ -32,19 +33,6 @@ beforeAll(async () => {
   await issuedRevision(neighbour, await openValue(neighbour));
 });
 
-/** A zone of its own for each test, so that none meets another's value. */
-async function freshPlace(world: World): Promise<{ zoneId: ZoneId; groundUnitId: GroundUnitId }> {
-  const [zoneId, groundUnitId] = [randomUUID() as ZoneId, world.groundUnitId];
-  await inside(world, async (tx) => {
-    await tx.execute(
-      sql`insert into zone (project_id, id, name) values (${world.projectId}, ${zoneId}, ${`Zone ${zoneId}`})`,
-    );
-    await tx.execute(
-      sql`insert into zone_ground_unit values (${world.projectId}, ${zoneId}, ${groundUnitId})`,
-    );
-  });
-  return { zoneId, groundUnitId };
-}
 const freshValue = async (): Promise<ValueId> =>
   (await createValue(here.preparer, await freshPlace(here))).id;
 
