@@ -29,9 +29,9 @@ export interface AgsHeading {
 /** One DATA row: its first line in the file and one text per heading, verbatim. */
 export interface AgsRow {
   readonly line: number;
-  /** Exactly as many cells as the group has headings; `found` says how many the row really had. */
+  /** Exactly as many cells as the group has headings. */
   readonly cells: readonly string[];
-  /** Set when the row had another number of cells than its heading row. */
+  /** Set when the row had another number of items than its heading row, so that its columns cannot be trusted. */
   readonly found?: number;
 }
 
@@ -48,8 +48,12 @@ export interface AgsGroup {
   readonly typeLine: number | null;
 }
 
+/** What the bytes turned out to be. Groups can be read from "ags4" alone. */
+export type AgsFileKind = "ags4" | "ags3" | "empty" | "no-groups" | "binary" | "zip" | "utf-16" | "too-large";
+
 /** What reading an AGS file gives: everything that could be read, and what was wrong with the shape of it. */
 export interface AgsFile {
+  readonly kind: AgsFileKind;
   /** The edition whose facts are used to judge the file. */
   readonly edition: AgsEdition;
   /** TRAN_AGS as written; null when the file does not say. */
@@ -62,6 +66,9 @@ export interface AgsFile {
   readonly groups: readonly AgsGroup[];
   /** Findings about bytes, rows and header rows: rules 1 to 6 and "file". */
   readonly findings: readonly AgsFinding[];
+  /** Findings of reading per severity and per rule, counting also those left out of a very long list. */
+  readonly counts: Readonly<Record<AgsSeverity, number>>;
+  readonly countsByRule: Readonly<Record<string, number>>;
 }
 
 /** The whole report on one file. */
