@@ -39,7 +39,8 @@ export function shareInside(pad: Footprint, ring_m: readonly GridPoint[]): numbe
     cut = cutLeftOf(cut, from, to);
   }
   const share = Math.abs(areaOf(cut)) / (pad.breadth_m * pad.length_m);
-  return Math.min(1, share);
+  // Within a billionth of the whole is the rounding of the cut.
+  return share > 1 - 1e-9 ? 1 : share;
 }
 
 /** The part of a ring on the left of the line from `from` to `to`. */
