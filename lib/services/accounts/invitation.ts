@@ -14,7 +14,13 @@ import type { Visitor } from "./visitor";
 type Holder = { id: PersonId; hasPassword: boolean; disabled: boolean };
 
 /** What the page of an invitation shows. Reading does not use the link up. */
-export type InvitationShown = { email: string; project: string; roles: string[]; needsAccount: boolean };
+export type InvitationShown = {
+  email: string;
+  projectId: ProjectId | null;
+  project: string;
+  roles: string[];
+  needsAccount: boolean;
+};
 
 /** Reads an invitation by its token; refuses one that cannot be used. */
 export async function readInvitation(token: string): Promise<InvitationShown> {
@@ -22,7 +28,13 @@ export async function readInvitation(token: string): Promise<InvitationShown> {
     const link = await readLink(tx, "invitation", token);
     const holder = await holderOf(tx, link.email);
     const project = await projectOf(tx, link);
-    return { email: link.email, project, roles: link.roles, needsAccount: !holder?.hasPassword };
+    return {
+      email: link.email,
+      projectId: link.project_id,
+      project,
+      roles: link.roles,
+      needsAccount: !holder?.hasPassword,
+    };
   });
 }
 

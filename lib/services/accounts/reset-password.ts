@@ -2,13 +2,24 @@ import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { resetPasswordInput } from "@/lib/contracts/accounts";
 import { throughDoor } from "../context";
-import { Invalid } from "../errors";
+import { Invalid, Refusal } from "../errors";
 import { parse } from "../parse";
 import { endEverySession } from "./end-sessions";
-import { takeLink } from "./one-time-link";
+import { readLink, takeLink } from "./one-time-link";
 import { hashPassword } from "./passwords";
 import { siteEvent } from "./site-event";
 import type { Visitor } from "./visitor";
+
+/** Whether a link from a reset mail can still be used. Looking does not use it up. */
+export async function isResetOpen(token: string): Promise<boolean> {
+  try {
+    await throughDoor("accounts", (tx) => readLink(tx, "password-reset", token));
+    return true;
+  } catch (error) {
+    if (error instanceof Refusal) return false;
+    throw error;
+  }
+}
 
 /** Sets a new password with the link from the mail, and ends every session of the person. */
 export async function resetPassword(visitor: Visitor, given: unknown): Promise<{ email: string }> {

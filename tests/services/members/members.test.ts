@@ -43,6 +43,7 @@ describe("an invitation", () => {
     const token = await tokenMailedTo("new.person@example.test");
     expect(await readInvitation(token)).toEqual({
       email: "new.person@example.test",
+      projectId: site.projectId,
       project: "M-01 Weir depot M-01",
       roles: ["geotechnical", "structural"],
       needsAccount: true,
