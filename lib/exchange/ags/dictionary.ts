@@ -58,11 +58,16 @@ export function standardDictionary(edition: AgsEdition): AgsDictionary {
 export function editionsWithGroup(name: string): AgsEdition[] {
   const entry = Object.hasOwn(dictionaryFacts, name) ? dictionaryFacts[name] : undefined;
   if (!entry) return [];
-  return (Object.keys(editionLetter) as AgsEdition[]).filter((edition) => entry[1].includes(editionLetter[edition]));
+  return (Object.keys(editionLetter) as AgsEdition[]).filter((edition) =>
+    entry[1].includes(editionLetter[edition]),
+  );
 }
 
 /** The dictionary that holds for one file: the standard of its edition and then its own DICT rows (rule 18). */
-export function dictionaryOf(file: Pick<AgsFile, "edition" | "groups">, edition = file.edition): AgsDictionary {
+export function dictionaryOf(
+  file: Pick<AgsFile, "edition" | "groups">,
+  edition = file.edition,
+): AgsDictionary {
   const declarations = file.groups.filter((group) => group.name === "DICT");
   const standard = standardDictionary(edition);
   if (declarations.length === 0) return standard;

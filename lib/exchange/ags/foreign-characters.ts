@@ -1,7 +1,7 @@
 import type { AgsEncoding } from "./file-model";
 import type { FindingList } from "./finding-list";
 
-const beyondAscii = /[^\u0000-\u007f]+/gu;
+const beyondAscii = /\P{ASCII}+/gu;
 
 /**
  * Rule 1: reports each line with characters outside ASCII. Characters 160 to 255 are a warning, because what they
@@ -33,7 +33,10 @@ function describe(restOfLine: string): { severity: "error" | "warning"; message:
     const code = character.codePointAt(0) ?? 0;
     if (code < 128) continue;
     if (code === 0xfffd) {
-      return { severity: "error", message: "A character here was already lost before the file was written (U+FFFD)." };
+      return {
+        severity: "error",
+        message: "A character here was already lost before the file was written (U+FFFD).",
+      };
     }
     if (worst === "" || (isLatin(worst) && !isLatin(character))) worst = character;
   }
@@ -45,7 +48,10 @@ function describe(restOfLine: string): { severity: "error" | "warning"; message:
     };
   }
   const shown = /\p{C}/u.test(worst) ? "" : ` "${worst}"`;
-  return { severity: "error", message: `The character${shown} (U+${code}) is outside what the format allows.` };
+  return {
+    severity: "error",
+    message: `The character${shown} (U+${code}) is outside what the format allows.`,
+  };
 }
 
 function isLatin(character: string): boolean {

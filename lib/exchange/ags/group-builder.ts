@@ -59,13 +59,18 @@ export class GroupBuilder {
     const names = items.map((item) => item.trim());
     while (names.length > 0 && names.at(-1) === "") names.pop();
     if (names.length < items.length) {
-      this.report("4", line, `The HEADING row ends in ${items.length - names.length} empty items, which were left off.`);
+      this.report(
+        "4",
+        line,
+        `The HEADING row ends in ${items.length - names.length} empty items, which were left off.`,
+      );
     }
     this.headings = names;
     this.headingLine = line;
     const seen = new Set<string>();
     for (const [place, name] of names.entries()) {
-      if (name !== items[place]) this.report("19a", line, `Blanks around the heading "${name}" were taken off.`, name);
+      if (name !== items[place])
+        this.report("19a", line, `Blanks around the heading "${name}" were taken off.`, name);
       if (seen.has(name)) this.report("2c", line, `The heading ${name} stands twice in this group.`, name);
       seen.add(name);
     }
@@ -99,7 +104,11 @@ export class GroupBuilder {
     this.rows.push(shifted ? { line, cells, found: items.length } : { line, cells });
   }
 
-  private fitted(items: readonly string[], line: number, what: Descriptor): { cells: readonly string[]; shifted: boolean } {
+  private fitted(
+    items: readonly string[],
+    line: number,
+    what: Descriptor,
+  ): { cells: readonly string[]; shifted: boolean } {
     const { headings } = this;
     if (!headings) return { cells: items, shifted: false };
     const expected = headings.length;
@@ -123,12 +132,21 @@ export class GroupBuilder {
     if (typeLine === null) this.report("2b", line, `The group ${this.name} has no TYPE row.`);
     if (unitLine !== null && typeLine !== null && typeLine < unitLine) {
       this.report("2b", typeLine, "The TYPE row stands above the UNIT row; it belongs below it.");
-      this.report("2b", unitLine, "The UNIT row stands below the TYPE row; it belongs directly below the headings.");
+      this.report(
+        "2b",
+        unitLine,
+        "The UNIT row stands below the TYPE row; it belongs directly below the headings.",
+      );
     } else {
-      for (const [what, at] of [["UNIT", unitLine], ["TYPE", typeLine]] as const) {
+      for (const [what, at] of [
+        ["UNIT", unitLine],
+        ["TYPE", typeLine],
+      ] as const) {
         if (at === null) continue;
-        if (headingLine !== null && at < headingLine) this.report("2b", at, `The ${what} row stands above the headings.`);
-        if (firstDataLine !== null && at > firstDataLine) this.report("2b", at, `The ${what} row stands below data rows.`);
+        if (headingLine !== null && at < headingLine)
+          this.report("2b", at, `The ${what} row stands above the headings.`);
+        if (firstDataLine !== null && at > firstDataLine)
+          this.report("2b", at, `The ${what} row stands below data rows.`);
       }
     }
   }
@@ -140,5 +158,7 @@ export class GroupBuilder {
 
 /** Findings in file order; those about the file as a whole come last, and equal lines keep their order. */
 export function sortFindings(findings: readonly AgsFinding[]): AgsFinding[] {
-  return [...findings].sort((a, b) => (a.line ?? Number.MAX_SAFE_INTEGER) - (b.line ?? Number.MAX_SAFE_INTEGER));
+  return [...findings].sort(
+    (a, b) => (a.line ?? Number.MAX_SAFE_INTEGER) - (b.line ?? Number.MAX_SAFE_INTEGER),
+  );
 }

@@ -127,7 +127,8 @@ class FileReader {
 
   private firstMark(at: number, end: number): number {
     let first = at;
-    while (first < end && (this.text.charCodeAt(first) === 32 || this.text.charCodeAt(first) === 9)) first += 1;
+    while (first < end && (this.text.charCodeAt(first) === 32 || this.text.charCodeAt(first) === 9))
+      first += 1;
     return first;
   }
 
@@ -164,7 +165,8 @@ class FileReader {
       place,
       'The line does not start with "GROUP", "HEADING", "UNIT", "TYPE" or "DATA", so it was not read.',
     );
-    if (!start.startsWith('"')) this.findings.add("5", "error", place, "The items of this line are not in double quotes.");
+    if (!start.startsWith('"'))
+      this.findings.add("5", "error", place, "The items of this line are not in double quotes.");
     const items = start.split(",").length;
     if (word === "HEADING") {
       this.unreadHeadingItems = items;
@@ -196,15 +198,26 @@ class FileReader {
       `An item of this row runs on over a line break; lines ${start} to ${this.line} were read as one row.`,
     );
     const below = { line: start + 1, group: this.group?.name ?? null };
-    this.findings.add("3", "error", below, `The line carries on an item from line ${start} instead of starting a row.`);
-    this.findings.add("5", "error", place, "An item opened on this line has no closing quote before the line ends.");
+    this.findings.add(
+      "3",
+      "error",
+      below,
+      `The line carries on an item from line ${start} instead of starting a row.`,
+    );
+    this.findings.add(
+      "5",
+      "error",
+      place,
+      "An item opened on this line has no closing quote before the line ends.",
+    );
   }
 
   private acceptRow(row: ScannedRow, line: number, first: number): void {
     const [descriptor = "", ...rest] = row.items;
     let items = rest;
     const expected = this.group?.width ?? 0;
-    const checked = isDescriptor(descriptor) && descriptor !== "GROUP" && descriptor !== "HEADING" && expected > 0;
+    const checked =
+      isDescriptor(descriptor) && descriptor !== "GROUP" && descriptor !== "HEADING" && expected > 0;
     if (checked && items.length !== expected) {
       const other = splitAtSeparators(this.text, first, row.next);
       if (other && other.length === expected + 1) {
@@ -226,7 +239,8 @@ class FileReader {
     const severity = fault === "blanks outside quotes" ? "warning" : "error";
     const sentences: Record<string, string> = {
       "item without quotes": "An item of this row is not in double quotes.",
-      "quote inside an item not doubled": "A double quote inside an item is not doubled; the row was read as best it can be.",
+      "quote inside an item not doubled":
+        "A double quote inside an item is not doubled; the row was read as best it can be.",
       "blanks outside quotes": "Blanks stand outside the quotes of an item.",
     };
     this.findings.add("5", severity, { line, group: this.group?.name ?? null }, sentences[fault] ?? fault);
@@ -253,7 +267,12 @@ class FileReader {
       this.findings.add("4", "error", { line, group: name }, "The GROUP row is filled up with empty items.");
     }
     if (name !== raw) {
-      this.findings.add("19", "error", { line, group: name }, `Blanks around the group name "${name}" were taken off.`);
+      this.findings.add(
+        "19",
+        "error",
+        { line, group: name },
+        `Blanks around the group name "${name}" were taken off.`,
+      );
     }
     this.group = new GroupBuilder(name, line, this.findings);
   }
@@ -272,14 +291,23 @@ class FileReader {
       findings.add("file", "warning", { line: this.line }, message);
     }
     const kind: AgsFileKind = groups.length === 0 ? "no-groups" : "ags4";
-    const stopped = kind === "no-groups" ? "No group could be read: this does not look like an AGS 4 file." : null;
+    const stopped =
+      kind === "no-groups" ? "No group could be read: this does not look like an AGS 4 file." : null;
     if (stopped) findings.add("file", "error", {}, stopped);
 
     const statedEdition = kind === "ags4" ? statedEditionOf(groups) : null;
     const { edition, known } = editionFor(statedEdition);
     if (kind === "ags4" && !known) {
-      const said = statedEdition === null ? "The file does not state its edition" : `"${statedEdition}" is no known edition`;
-      findings.add("file", "warning", { group: "TRAN", heading: "TRAN_AGS" }, `${said}; it is judged by ${edition}.`);
+      const said =
+        statedEdition === null
+          ? "The file does not state its edition"
+          : `"${statedEdition}" is no known edition`;
+      findings.add(
+        "file",
+        "warning",
+        { group: "TRAN", heading: "TRAN_AGS" },
+        `${said}; it is judged by ${edition}.`,
+      );
     }
     return {
       kind,

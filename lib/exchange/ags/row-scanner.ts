@@ -13,7 +13,10 @@ export type Descriptor = (typeof descriptors)[number];
 const rowStart = /[ \t]*"(?:GROUP|HEADING|UNIT|TYPE|DATA)"/y;
 
 /** What went against the quoting rules in one row. */
-export type QuotingFault = "item without quotes" | "quote inside an item not doubled" | "blanks outside quotes";
+export type QuotingFault =
+  | "item without quotes"
+  | "quote inside an item not doubled"
+  | "blanks outside quotes";
 
 /** One row as scanned: its items, where the next line begins, and what was mended on the way. */
 export interface ScannedRow {
@@ -28,7 +31,10 @@ export interface ScannedRow {
 }
 
 /** End of the line that begins at `from`, without its line break, and the start of the next one. */
-export function lineAt(text: string, from: number): { end: number; next: number; crlf: boolean; last: boolean } {
+export function lineAt(
+  text: string,
+  from: number,
+): { end: number; next: number; crlf: boolean; last: boolean } {
   const feed = text.indexOf("\n", from);
   if (feed === -1) return { end: text.length, next: text.length, crlf: false, last: true };
   const crlf = feed > from && text.charCodeAt(feed - 1) === 13;

@@ -17,6 +17,8 @@ export interface CsvTable {
   /** Cells of a row of units under the headings; null when there is none. */
   readonly units: readonly string[] | null;
   readonly rows: readonly { readonly row: number; readonly cells: readonly string[] }[];
+  /** Number of rows below the headings and units, with those left out for having another number of cells. */
+  readonly rowCount: number;
   readonly findings: readonly CsvFinding[];
   /** Why the file could not be read at all; null when it could. */
   readonly refused: string | null;
