@@ -40,12 +40,14 @@ export function AuditPanel({ projectId, first }: Props) {
         Audit trail
       </h2>
       <div className="flex flex-wrap items-end gap-4">
-        <form role="search" method="post" onSubmit={onSubmit} className="flex items-end gap-3">
-          <TextField name="search" label="Search who, what and details" type="search" maxLength={200} />
-          <button type="submit" aria-disabled={busy} className="border border-rule px-3 py-1.5">
-            Search
-          </button>
-        </form>
+        <search>
+          <form method="post" onSubmit={onSubmit} className="flex items-end gap-3">
+            <TextField name="search" label="Search who, what and details" type="search" maxLength={200} />
+            <button type="submit" aria-disabled={busy} className="border border-rule px-3 py-1.5">
+              Search
+            </button>
+          </form>
+        </search>
         <a href={`${path}/export`} className="py-1.5 underline" download>
           Take away as CSV
         </a>

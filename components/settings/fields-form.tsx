@@ -139,7 +139,7 @@ function Field({ field, problem }: { field: SettingsField; problem?: string }) {
 function bodyOf(fields: SettingsField[], typed: FormData, onlyChanged: boolean): Record<string, unknown> {
   const body: Record<string, unknown> = {};
   for (const field of fields) {
-    const value = valueOf(field, String(typed.get(field.name) ?? ""));
+    const value = valueTyped(field, String(typed.get(field.name) ?? ""));
     if (value === undefined || (onlyChanged && value === field.value)) continue;
     const [outer = "", inner] = field.name.split(".");
     if (inner === undefined) body[outer] = value;
@@ -148,7 +148,7 @@ function bodyOf(fields: SettingsField[], typed: FormData, onlyChanged: boolean):
   return body;
 }
 
-function valueOf({ kind, optional }: SettingsField, typed: string): unknown {
+function valueTyped({ kind, optional }: SettingsField, typed: string): unknown {
   const text = typed.trim();
   if (kind === "yes-no") return text === "" ? undefined : text === "yes";
   if (kind === "choice") return text === "" ? undefined : text;

@@ -22,18 +22,20 @@ export default async function PeoplePage({
     <main className="mx-auto max-w-4xl p-6">
       <AccountLine name={visitor.person.name} siteAdministrator />
       <h1 className="mt-6 text-xl">People</h1>
-      <form role="search" className="mt-4 flex gap-3">
-        <input
-          type="search"
-          name="search"
-          aria-label="Name or address"
-          defaultValue={search}
-          className="border border-rule bg-sheet px-2 py-1.5"
-        />
-        <button type="submit" className="border border-rule px-3 py-1.5">
-          Search
-        </button>
-      </form>
+      <search>
+        <form className="mt-4 flex gap-3">
+          <input
+            type="search"
+            name="search"
+            aria-label="Name or address"
+            defaultValue={search}
+            className="border border-rule bg-sheet px-2 py-1.5"
+          />
+          <button type="submit" className="border border-rule px-3 py-1.5">
+            Search
+          </button>
+        </form>
+      </search>
       <PeopleList people={people} ownId={visitor.person.id} />
     </main>
   );
