@@ -138,23 +138,14 @@ export class RowReader<Name extends string> {
 
 /** Takes a heading apart: "Breadth (m)", "breadth_m", "groundLevel_m", "Breadth [mm]", "Breadth, m". */
 export function readHeading(heading: string): { words: string; unit: string } {
-  const bracketed = /^(.*?)[\s_]*[([]\s*([^)\]]*)\s*[)\]]\s*$/.exec(heading);
-  if (bracketed && isUnit(bracketed[2] ?? ""))
-    return { words: wordsOf(bracketed[1] ?? ""), unit: bracketed[2] ?? "" };
-  const tail = /^(.+?)(_|,\s*|\s+in\s+|\s*\/\s*|\s+)([^\s_,]+)$/.exec(heading);
-  const [, before = "", between = "", unit = ""] = tail ?? [];
+  const [, name = "", inner = ""] = /^(.*?)[\s_]*[([]\s*([^)\]]*)\s*[)\]]\s*$/.exec(heading) ?? [];
+  if (isUnit(inner)) return { words: wordsOf(name), unit: inner };
+  const [, before = "", between = "", unit = ""] =
+    /^(.+?)(_|,\s*|\s+in\s+|\s*\/\s*|\s+)([^\s_,]+)$/.exec(heading) ?? [];
   // After a mere blank, N and "in" are words ("Axial N"), not newton and inch.
   const word = between.trim() === "" && /^(n|in)$/i.test(unit);
-  if (tail && isUnit(unit) && !word) return { words: wordsOf(before), unit };
-  return { words: wordsOf(bracketed[1] ?? ""), unit: bracketed[2] ?? "" };
-  const tail = /^(.+?)(?:_|,\s*|\s+in\s+|\s*\/\s*|\s+)([^\s_,]+)$/.exec(heading);
-  if (tail && isUnit(tail[2] ?? "") && !/^(n|N|in)$/.test(tail[2] ?? "")) {
-    return { words: wordsOf(tail[1] ?? ""), unit: tail[2] ?? "" };
-  }
-  return {
-    words: wordsOf(bracketed && bracketed[2] !== "" ? heading : (bracketed?.[1] ?? heading)),
-    unit: "",
-  };
+  if (isUnit(unit) && !word) return { words: wordsOf(before), unit };
+  return { words: wordsOf(heading), unit: "" };
 }
 
 function wordsOf(text: string): string {
