@@ -1,18 +1,19 @@
+import { randomUUID } from "node:crypto";
 import { type SQL, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { ValueRevisionId } from "@/lib/contracts/ids";
 import {
+  footingsQuery,
   type GatheredCriteria,
   type GatheredFooting,
   gatherCriteria,
-  gatherFootings,
   gatherTerms,
   type ValueTerms,
 } from "../checks/gather";
 import type { Context } from "../context";
 
-/** Ten thousand footings are four batches: few statements, and memory that does not grow with the site. */
-const BATCH = 2500;
+/** Ten thousand footings are five batches: few statements, and memory that does not grow with the site. */
+const BATCH = 2000;
 
 export type LinkedBatch = {
   footings: GatheredFooting[];
@@ -23,7 +24,8 @@ export type LinkedBatch = {
 
 /**
  * Footings `f` (their last check is `k`) that a condition selects, in batches, with all that a check made now would read.
- * Those without loads cannot be checked and are left out.
+ * Those without loads cannot be checked and are left out. One cursor reads them in one pass, as they stood when it was
+ * opened; it is read to its end or closed with the transaction.
  */
 export async function* gatherLinked(
   tx: Transaction,
@@ -34,18 +36,28 @@ export async function* gatherLinked(
   const terms = new Map<ValueRevisionId, ValueTerms>();
   const termsOf = ({ valueRevisionId }: GatheredFooting) =>
     (valueRevisionId && terms.get(valueRevisionId)) || null;
-  let after = "00000000-0000-0000-0000-000000000000";
-  for (;;) {
-    const which = sql`f.id > ${after}::uuid and l.id is not null and ${where}`;
-    const footings = await gatherFootings(tx, context, which, BATCH);
+  const cursor = sql.identifier(`linked_${randomUUID()}`);
+  await tx.execute(
+    sql`declare ${cursor} no scroll cursor for ${footingsQuery(context, sql`l.id is not null and ${where}`)}`,
+  );
+  const fetch = async () => tx.execute<GatheredFooting>(sql`fetch ${sql.raw(String(BATCH))} from ${cursor}`);
+  const begin = () => {
+    const batch = fetch();
+    // Awaited below; a caller that gives up first must not leave a rejection that nobody hears.
+    batch.catch(() => {});
+    return batch;
+  };
+  for (let batch = begin(), more = true; more; ) {
+    const { rows: footings } = await batch;
     const unread = new Set<ValueRevisionId>();
     for (const { valueRevisionId } of footings)
       if (valueRevisionId && !terms.has(valueRevisionId)) unread.add(valueRevisionId);
     if (unread.size > 0)
       for (const [id, stated] of await gatherTerms(tx, context, [...unread])) terms.set(id, stated);
+    more = footings.length === BATCH;
+    // The server reads the next batch while this one is judged here. Never more than one statement waits behind another.
+    if (more) batch = begin();
     if (footings.length > 0) yield { footings, criteria, termsOf };
-    const last = footings.at(-1);
-    if (footings.length < BATCH || !last) return;
-    after = last.id;
   }
+  await tx.execute(sql`close ${cursor}`);
 }

@@ -35,6 +35,8 @@ export async function recordConsequences(
   const byOwner: TallyByOwner = new Map();
   const touched =
     "valueId" in given ? sql`f.value_id = ${given.valueId}` : sql`k.id is not null and ${given.checked}`;
+  // Stored by the server while the next batch is judged here.
+  let storing: Promise<void> = Promise.resolve();
   for await (const { footings, criteria, termsOf } of gatherLinked(tx, context, touched)) {
     const batch = emptyBatch();
     for (const footing of footings) {
@@ -52,9 +54,12 @@ export async function recordConsequences(
       batch.stage.push(footing.stage);
       tally(byOwner, footing.ownerId, outcome);
     }
-    await store(tx, context, given.changeId, batch);
+    await storing;
+    storing = store(tx, context, given.changeId, batch);
+    storing.catch(() => {});
     await faultPoint("consequences:batch");
   }
+  await storing;
   return byOwner;
 }
 

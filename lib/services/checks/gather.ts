@@ -133,7 +133,14 @@ export async function gatherFootings(
   which: SQL,
   limit?: number,
 ): Promise<GatheredFooting[]> {
-  const { rows } = await tx.execute<GatheredFooting>(sql`
+  const order = limit === undefined ? sql`order by f.id` : sql`order by f.id limit ${limit}`;
+  const { rows } = await tx.execute<GatheredFooting>(sql`${footingsQuery(context, which)} ${order}`);
+  return rows;
+}
+
+/** The query of `gatherFootings`, in no order: for a cursor that reads any number of footings in one pass. */
+export function footingsQuery(context: Context, which: SQL): SQL {
+  return sql`
     select f.id, f.mark, f.owner_id as "ownerId", f.stage, f.current_revision_id as "footingRevisionId",
       g.easting_m, g.northing_m, g.breadth_m, g.length_m, g.thickness_m, g.ground_level_m as "groundLevel_m",
       g.founding_level_m as "foundingLevel_m", g.load_height_m as "loadHeight_m",
@@ -148,9 +155,7 @@ export async function gatherFootings(
     left join bearing_value v on v.project_id = f.project_id and v.id = f.value_id
     left join zone z on z.project_id = v.project_id and z.id = v.zone_id
     left join footing_check k on k.project_id = f.project_id and k.id = f.latest_check_id
-    where f.project_id = ${context.projectId} and ${which}
-    order by f.id ${limit === undefined ? sql`` : sql`limit ${limit}`}`);
-  return rows;
+    where f.project_id = ${context.projectId} and ${which}`;
 }
 
 /** One statement: what each of these revisions states. */
