@@ -1,6 +1,7 @@
 import type { DraftContent, DraftFinding, StatedFields } from "@/lib/contracts/values";
+import { type Kind, SI_UNIT } from "@/lib/units/factors";
 import { askIfPlausible } from "./plausible";
-import { plainNumber, pressure_kPa, type Read } from "./typed-quantity";
+import { type Read, typedQuantity } from "./typed-quantity";
 
 export type DraftReading = {
   /** Complete and within bounds, or null while there are problems. */
@@ -34,7 +35,7 @@ const termNames = [
   ...ranges,
 ] as const;
 
-type Bounds = { least: number; most: number; open?: boolean; unit: string };
+type Bounds = { least: number; most: number; open?: boolean; kind: Kind | null };
 type Problems = Record<string, string>;
 
 /**
@@ -57,7 +58,7 @@ export function readDraft(draft: DraftContent, ground: { soil: string; today: st
     take(
       problems,
       name,
-      plainNumber(draft[name] as string | number | null | undefined, bounds.unit),
+      typedQuantity(draft[name] as string | number | null | undefined, bounds.kind),
       bounds,
       missing,
     );
@@ -68,19 +69,23 @@ export function readDraft(draft: DraftContent, ground: { soil: string; today: st
   const ranges = readRanges(problems, amount);
   const factorOfSafety = amount(
     "factorOfSafety",
-    { least: 1, most: 10, unit: "" },
+    { least: 1, most: 10, kind: null },
     draft.factorConvention && draft.factorConvention !== "not-stated"
       ? "State the factor that this convention was used with."
       : undefined,
   );
   const settlementLimit_mm = amount(
     "settlementLimit_mm",
-    { least: 0, most: 500, open: true, unit: "mm" },
+    { least: 0, most: 500, open: true, kind: "settlement" },
     draft.governedBy === "settlement"
       ? "A value governed by settlement states the settlement it allows."
       : undefined,
   );
-  const settlementPredicted_mm = amount("settlementPredicted_mm", { least: 0, most: 500, unit: "mm" });
+  const settlementPredicted_mm = amount("settlementPredicted_mm", {
+    least: 0,
+    most: 500,
+    kind: "settlement",
+  });
   const confirmation = readBasis(draft, problems);
   const texts = readTexts(draft, problems);
   askAround(draft, ground, pressure.net_kPa, confirmation.confirmBy, findings);
@@ -133,7 +138,8 @@ function take(problems: Problems, name: string, read: Read, bounds: Bounds, miss
     if (missing) problems[name] = missing;
     return null;
   }
-  const { least, most, open, unit } = bounds;
+  const { least, most, open, kind } = bounds;
+  const unit = kind === null ? "" : SI_UNIT[kind];
   if (read.amount < least || read.amount > most || (open && read.amount === least)) {
     const from = open ? `above ${least}` : `from ${least}`;
     problems[name] = `${from} to ${most}${unit && ` ${unit}`} is possible here.`.replace(/^./, (c) =>
@@ -145,11 +151,11 @@ function take(problems: Problems, name: string, read: Read, bounds: Bounds, miss
 }
 
 function readPressure(draft: DraftContent, problems: Problems) {
-  const bounds = { least: 0, most: 100_000, open: true, unit: "kPa" };
+  const bounds: Bounds = { least: 0, most: 100_000, open: true, kind: "pressure" };
   const given_kPa = take(
     problems,
     "given",
-    pressure_kPa(draft.given),
+    typedQuantity(draft.given, "pressure"),
     bounds,
     "Give the pressure as the report has it.",
   );
@@ -163,8 +169,8 @@ function readPressure(draft: DraftContent, problems: Problems) {
   const overburden_kPa = take(
     problems,
     "givenOverburden_kPa",
-    pressure_kPa(draft.givenOverburden_kPa),
-    { least: 0, most: 5000, unit: "kPa" },
+    typedQuantity(draft.givenOverburden_kPa, "pressure"),
+    { least: 0, most: 5000, kind: "pressure" },
     "A gross figure needs the overburden at founding level that it includes.",
   );
   if (given_kPa === null || overburden_kPa === null)
@@ -224,7 +230,7 @@ function readTransient(
     return { transientIncrease: "none", transientFactor: 1, accidentalFactor: 1 };
   if (draft.loadBasis === "characteristic-reduced")
     problems.transientIncrease = "Loads that are already reduced cannot have the increase as well.";
-  const bounds = { least: 1, most: 2, unit: "" };
+  const bounds: Bounds = { least: 1, most: 2, kind: null };
   const missing = "State the factor that the report grants; 1 where it grants none.";
   const transientFactor = amount("transientFactor", bounds, missing);
   const accidentalFactor = amount("accidentalFactor", bounds, missing);
@@ -248,8 +254,8 @@ function readRanges(
     missing?: string,
   ) => number | null,
 ) {
-  const breadth = { least: 0, most: 100, open: true, unit: "m" };
-  const level = { least: -500, most: 9000, unit: "m" };
+  const breadth: Bounds = { least: 0, most: 100, open: true, kind: "length" };
+  const level: Bounds = { least: -500, most: 9000, kind: "length" };
   const minBreadth_m = amount("minBreadth_m", breadth);
   const maxBreadth_m = amount("maxBreadth_m", breadth);
   if (minBreadth_m !== null && maxBreadth_m !== null && maxBreadth_m < minBreadth_m)
@@ -265,13 +271,13 @@ function readRanges(
   return {
     minBreadth_m,
     maxBreadth_m,
-    minFoundingDepth_m: amount("minFoundingDepth_m", { least: 0, most: 100, unit: "m" }),
+    minFoundingDepth_m: amount("minFoundingDepth_m", { least: 0, most: 100, kind: "length" }),
     highestFoundingLevel_m,
     lowestFoundingLevel_m,
     groundwaterLevel_m: amount("groundwaterLevel_m", level),
     soilUnitWeight_kNm3: amount(
       "soilUnitWeight_kNm3",
-      { least: 8, most: 28, unit: "kN/m³" },
+      { least: 8, most: 28, kind: "unitWeight" },
       "State the unit weight of the soil above founding level.",
     ),
   };

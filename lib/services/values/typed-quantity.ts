@@ -1,27 +1,24 @@
-/** What was typed, read: an amount in the field's unit (null when nothing was typed), or what is wrong with it. */
+import { type Kind, SI_UNIT } from "@/lib/units/factors";
+import { readQuantity } from "@/lib/units/read-quantity";
+
+/** What was typed, read: an amount in SI (null when nothing was typed), or what is wrong with it. */
 export type Read = { amount: number | null } | { problem: string };
 
-const DECIMAL = /^[+-]?\d{1,12}(\.\d{1,12})?$/;
-
-/** Reads a number that may repeat its field's unit ("1.5", "1.5 m"); a decimal comma or another unit is not guessed at. */
-export function plainNumber(typed: string | number | null | undefined, unit: string): Read {
+/** Reads a quantity of a kind, with its unit or, as the field's label says, in its SI unit without; `null` is a pure number. */
+export function typedQuantity(typed: string | number | null | undefined, kind: Kind | null): Read {
   if (typed === null || typed === undefined) return { amount: null };
   if (typeof typed === "number")
     return Number.isFinite(typed) ? { amount: typed } : { problem: "This is not a number." };
-  const text = typed.trim().replace(/[−–]/g, "-");
+  const text = typed.trim();
   if (text === "") return { amount: null };
-  const bare = unit !== "" && endsInUnit(text, unit) ? text.slice(0, -unit.length).trim() : text;
-  if (DECIMAL.test(bare)) return { amount: Number(bare) };
-  if (/^[+-]?\d+,\d+$/.test(bare))
-    return { problem: `Write the decimal with a point: ${bare.replace(",", ".")}.` };
-  return { problem: unit === "" ? "Give a number, as 3 or 2.5." : `Give a number in ${unit}, as 2.5.` };
+  if (kind === null) return pureNumber(text);
+  const read = readQuantity(text, kind, SI_UNIT[kind]);
+  return "problem" in read ? read : { amount: read.amount };
 }
 
-const plain = (unit: string): string => unit.toLowerCase().replace("³", "3").replace("²", "2");
-
-const endsInUnit = (text: string, unit: string): boolean => plain(text).endsWith(plain(unit));
-
-// replaced when lib/units arrives
-export function pressure_kPa(typed: string | number | null | undefined): Read {
-  return plainNumber(typed, "kPa");
+function pureNumber(text: string): Read {
+  if (/^[+-]?\d{1,12}(\.\d{1,12})?$/.test(text)) return { amount: Number(text) };
+  if (/^[+-]?\d+,\d+$/.test(text))
+    return { problem: `Write the decimal with a point: ${text.replace(",", ".")}.` };
+  return { problem: "Give a number without a unit, as 3 or 2.5." };
 }

@@ -131,9 +131,13 @@ describe("units as typed", () => {
     expect(problemsOf({ minBreadth_m: "1,5" }).minBreadth_m).toContain("1.5");
   });
 
-  it("takes a number with its own unit and refuses another", () => {
-    expect(problemsOf({ minBreadth_m: "1.5 m" })).toEqual({});
-    expect(problemsOf({ minBreadth_m: "5 ft" })).toHaveProperty("minBreadth_m");
+  it("takes a breadth in metres or feet and refuses one in kPa", () => {
+    expect(readDraft({ ...complete, minBreadth_m: "1.5 m" }, gravel).fields?.minBreadth_m).toBe(1.5);
+    expect(readDraft({ ...complete, minBreadth_m: "5 ft" }, gravel).fields?.minBreadth_m).toBeCloseTo(
+      1.524,
+      9,
+    );
+    expect(problemsOf({ minBreadth_m: "5 kPa" })).toHaveProperty("minBreadth_m");
   });
 });
 
