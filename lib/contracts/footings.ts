@@ -185,6 +185,8 @@ export const listFootingsInput = z.strictObject({
   /** As the page before gave it in `next`. */
   after: plainText(300).optional(),
   limit: z.coerce.number().int().min(1).max(500).default(100),
+  /** Whether the first page counts all that match. */
+  counts: z.enum(["yes", "no"]).default("yes"),
 });
 /** The ids that a filter selects, for acting on all of them. */
 export const selectFootingsInput = z.strictObject(filters);

@@ -1,9 +1,10 @@
-import { type SQL, sql } from "drizzle-orm";
+import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { FootingItem } from "@/lib/contracts/footings";
+import type { FootingId } from "@/lib/contracts/ids";
 import type { Context } from "../context";
 
-/** What the rows and the filters of footings stand on: `f` with its size, loads, value, last check and its standing. */
+/** What filters and orders stand on: `f` with its size, its value, its last check and how that stands. */
 export const footingSources = sql`
   footing f
   join footing_revision g on g.project_id = f.project_id and g.id = f.current_revision_id
@@ -11,14 +12,14 @@ export const footingSources = sql`
   left join footing_check k on k.project_id = f.project_id and k.id = f.latest_check_id
   left join check_standing s on s.project_id = f.project_id and s.check_id = f.latest_check_id`;
 
-/** Footings as lists show them. `where`, `order` and `key` speak of the names in `footingSources`. */
+/** Footings as lists show them, in the order of the ids given; those of other projects are left out. */
 export async function selectFootings(
   tx: Transaction,
   context: Context,
-  choice: { where: SQL; order?: SQL; limit?: number; key?: SQL },
-): Promise<(FootingItem & { sortKey: unknown })[]> {
-  const { where, order = sql`f.mark collate natural_order, f.id`, limit, key = sql`null` } = choice;
-  const { rows } = await tx.execute<FootingItem & { sortKey: unknown }>(sql`
+  ids: readonly FootingId[],
+): Promise<FootingItem[]> {
+  if (ids.length === 0) return [];
+  const { rows } = await tx.execute<FootingItem>(sql`
     select f.id, f.revision, f.mark, f.grid_reference as "gridReference",
       case when o.id is not null then json_build_object('id', o.id, 'name', o.name) end as owner, f.stage,
       g.easting_m, g.northing_m, g.orientation_deg, g.breadth_m, g.length_m, g.thickness_m,
@@ -32,8 +33,7 @@ export async function selectFootings(
       case when k.id is not null then json_build_object('id', k.id, 'verdict', k.verdict,
         'utilisation', k.utilisation, 'requiredNet_kPa', k.required_net_kpa, 'standing', s.standing,
         'reasons', s.reasons, 'currentNumber', coalesce(r.number, b.number), 'code', b.code,
-        'netAllowable_kPa', k.net_allowable_kpa) end as "check",
-      ${key} as "sortKey"
+        'netAllowable_kPa', k.net_allowable_kpa) end as "check"
     from ${footingSources}
     left join load_set l on l.project_id = f.project_id and l.id = f.current_load_set_id
     left join zone z on z.project_id = v.project_id and z.id = v.zone_id
@@ -41,7 +41,7 @@ export async function selectFootings(
     left join bearing_value_revision r on r.project_id = v.project_id and r.id = v.current_revision_id
     left join bearing_value_revision b on b.project_id = k.project_id and b.id = k.value_revision_id
     left join person o on o.id = f.owner_id
-    where f.project_id = ${context.projectId} and ${where}
-    order by ${order} ${limit === undefined ? sql`` : sql`limit ${limit}`}`);
-  return rows;
+    where f.project_id = ${context.projectId} and f.id = any(${sql.param([...ids])}::uuid[])`);
+  const byId = new Map(rows.map((row) => [row.id, row]));
+  return ids.flatMap((id) => byId.get(id) ?? []);
 }

@@ -8,6 +8,7 @@ import {
   listFootingsInput,
   stages,
 } from "@/lib/contracts/footings";
+import type { FootingId } from "@/lib/contracts/ids";
 import { assertMay, type Context, inProject } from "../context";
 import { Invalid } from "../errors";
 import { parse } from "../parse";
@@ -17,7 +18,7 @@ import { footingSources, selectFootings } from "./footing-rows";
 /** A page of the footings that a filter selects, with how many of them stand how (on the first page). */
 export async function listFootings(context: Context, given: ListFootingsInput): Promise<FootingList> {
   assertMay(context, "project:read");
-  const { sort, descending, after, limit, ...filter } = parse(listFootingsInput, given);
+  const { sort, descending, after, limit, counts, ...filter } = parse(listFootingsInput, given);
   const matching = filterFootings(filter);
   const key = sortKeys[sort];
   const down = descending === "yes";
@@ -28,18 +29,21 @@ export async function listFootings(context: Context, given: ListFootingsInput): 
     const order = key
       ? sql`${key} ${direction}, f.mark collate natural_order, f.id`
       : sql`f.mark collate natural_order ${direction}, f.id ${direction}`;
-    const rows = await selectFootings(tx, context, {
-      where: sql`${matching} and ${beyond}`,
-      order,
-      limit: limit + 1,
-      key: key ?? sql`null`,
-    });
-    const items = rows.slice(0, limit);
-    const last = rows.length > limit ? items.at(-1) : undefined;
+    const { rows } = await tx.execute<{ id: FootingId; mark: string; sortKey: unknown }>(sql`
+      select f.id, f.mark, ${key ?? sql`null`} as "sortKey"
+      from ${footingSources}
+      where f.project_id = ${context.projectId} and ${matching} and ${beyond}
+      order by ${order} limit ${limit + 1}`);
+    const page = rows.slice(0, limit);
+    const last = rows.length > limit ? page.at(-1) : undefined;
     return {
-      items: items.map(({ sortKey: _, ...item }) => item),
+      items: await selectFootings(
+        tx,
+        context,
+        page.map(({ id }) => id),
+      ),
       next: last ? JSON.stringify([last.sortKey, last.mark, last.id]) : null,
-      counts: after === undefined ? await count(tx, context, matching) : null,
+      counts: after === undefined && counts === "yes" ? await count(tx, context, matching) : null,
     };
   });
 }

@@ -27,9 +27,8 @@ export async function readFooting(context: Context, given: ReadFootingInput): Pr
   const { footingId } = parse(readFootingInput, given);
 
   return inProject(context, async (tx) => {
-    const [row] = await selectFootings(tx, context, { where: sql`f.id = ${footingId}` });
-    if (!row) throw new NotFound("There is no such footing in this project.");
-    const { sortKey: _, ...item } = row;
+    const [item] = await selectFootings(tx, context, [footingId]);
+    if (!item) throw new NotFound("There is no such footing in this project.");
     const { concrete, issue } = await holdsOf(tx, context, footingId);
     return {
       ...item,
