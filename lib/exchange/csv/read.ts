@@ -174,5 +174,5 @@ function decimalMarkOf(
   const message =
     `The file mixes decimal points (${counts["."]} cells) and decimal commas (${counts[","]} cells). ` +
     `Numbers with a ${mark === "." ? "comma" : "point"} are refused.`;
-  return { mark, findings: [{ row: comma.row, column: comma.column, severity: "error", message }] };
+  return { mark, findings: [{ row: comma.row, column: comma.column, severity: "warning", message }] };
 }
