@@ -1,8 +1,10 @@
 import type { LinkCandidate, LinkSuggestion } from "@/lib/contracts/footings";
 import type { FootingId, GroundUnitId, ValueId, ZoneId } from "@/lib/contracts/ids";
-import { type Footprint, type GridPoint, shareInside } from "./footprint";
+import { shareInside } from "@/lib/geometry/overlap";
+import type { Ring } from "@/lib/geometry/point";
+import { cornersOf, type Rectangle } from "@/lib/geometry/rectangle";
 
-export type PlacedFooting = Footprint & {
+export type PlacedFooting = Rectangle & {
   id: FootingId;
   mark: string;
   foundingLevel_m: number;
@@ -13,7 +15,7 @@ export type PlacedFooting = Footprint & {
 export type ZoneWithValues = {
   id: ZoneId;
   name: string;
-  ring_m: readonly GridPoint[];
+  ring_m: Ring;
   values: ZoneValue[];
 };
 
@@ -32,6 +34,9 @@ export type ZoneValue = {
 /** Less than this part of a footprint is the rounding of a coordinate, not ground. */
 const SLIVER = 1e-6;
 
+/** Within a billionth of the whole is the rounding of an area. */
+const whole = (share: number): number => (share > 1 - 1e-9 ? 1 : share);
+
 type Touched = { zone: ZoneWithValues; share: number };
 
 /**
@@ -39,9 +44,9 @@ type Touched = { zone: ZoneWithValues; share: number };
  * footprint leaves the zones, where a zone has no value in force, or where two ground units could be meant.
  */
 export function suggestLink(footing: PlacedFooting, zones: readonly ZoneWithValues[]): LinkSuggestion {
+  const corners = cornersOf(footing);
   const touched: Touched[] = zones
-    .filter((zone) => mayTouch(footing, zone.ring_m))
-    .map((zone) => ({ zone, share: shareInside(footing, zone.ring_m) }))
+    .map((zone) => ({ zone, share: whole(shareInside(corners, zone.ring_m)) }))
     .filter(({ share }) => share > SLIVER)
     .sort((a, b) => b.share - a.share || (a.zone.name < b.zone.name ? -1 : 1));
   const straddles = touched.some(({ share }) => share < 1 - SLIVER) && touched.length > 1;
@@ -153,24 +158,3 @@ const candidateOf = (value: ZoneValue, zone: ZoneWithValues, share: number): Lin
   netAllowable_kPa: value.netAllowable_kPa,
   share,
 });
-
-/** Whether the box around a zone comes within the pad's half diagonal: spares the cut for zones far away. */
-function mayTouch(pad: Footprint, ring_m: readonly GridPoint[]): boolean {
-  const reach_m = Math.hypot(pad.breadth_m, pad.length_m) / 2;
-  let west = Number.POSITIVE_INFINITY;
-  let east = Number.NEGATIVE_INFINITY;
-  let south = Number.POSITIVE_INFINITY;
-  let north = Number.NEGATIVE_INFINITY;
-  for (const [easting_m, northing_m] of ring_m) {
-    west = Math.min(west, easting_m);
-    east = Math.max(east, easting_m);
-    south = Math.min(south, northing_m);
-    north = Math.max(north, northing_m);
-  }
-  return (
-    pad.easting_m + reach_m >= west &&
-    pad.easting_m - reach_m <= east &&
-    pad.northing_m + reach_m >= south &&
-    pad.northing_m - reach_m <= north
-  );
-}

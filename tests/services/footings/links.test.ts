@@ -5,7 +5,6 @@ import type { FootingId, GroundUnitId, ValueId, ZoneId } from "@/lib/contracts/i
 import { readFooting } from "@/lib/services/footings/read-footing";
 import { chooseLink } from "@/lib/services/links/choose-link";
 import { confirmLinks } from "@/lib/services/links/confirm-links";
-import { shareInside } from "@/lib/services/links/footprint";
 import { suggestLinks } from "@/lib/services/links/suggest-links";
 import { createValue } from "@/lib/services/values/create-value";
 import { freshDatabase } from "../../support/database";
@@ -13,53 +12,12 @@ import { auditVerbs, lookInto, refusalOf } from "../../support/site";
 import { buildWorld, countOf, inside, issuedRevision, openValue, type World } from "../values/register-world";
 import { makeMany, makePad, statementsOf } from "./schedule";
 
-const pad = { easting_m: 10, northing_m: 20, orientation_deg: 0, breadth_m: 2, length_m: 4 };
 const box = (west: number, south: number, east: number, north: number): [number, number][] => [
   [west, south],
   [east, south],
   [east, north],
   [west, north],
 ];
-
-describe("the part of a footprint inside a zone", () => {
-  it("is the whole for a zone around it, and none for a zone beside it", () => {
-    expect(shareInside(pad, box(0, 0, 100, 100))).toBe(1);
-    expect(shareInside(pad, box(11, 0, 100, 100))).toBe(0);
-  });
-
-  it("is a quarter where the boundary cuts at a quarter of the breadth", () => {
-    expect(shareInside(pad, box(0, 0, 9.5, 100))).toBeCloseTo(0.25, 12);
-  });
-
-  it("turns with the pad: breadth along northing at 90°", () => {
-    expect(shareInside({ ...pad, orientation_deg: 90 }, box(0, 0, 9, 100))).toBeCloseTo(0.25, 12);
-  });
-
-  it("is a half at 45° where the boundary goes through the centre", () => {
-    expect(shareInside({ ...pad, orientation_deg: 45 }, box(0, 0, 10, 100))).toBeCloseTo(0.5, 12);
-  });
-
-  it("does not count the notch of a zone that is not convex", () => {
-    const notched: [number, number][] = [
-      [0, 0],
-      [100, 0],
-      [100, 100],
-      [11, 100],
-      [11, 20],
-      [9, 20],
-      [9, 100],
-      [0, 100],
-    ];
-    expect(shareInside({ ...pad, breadth_m: 4 }, notched)).toBeCloseTo(1 - (2 * 2) / 16, 12);
-  });
-
-  it("is the same a million metres away, and for a ring drawn the other way round", () => {
-    const far = { ...pad, easting_m: 523_010, northing_m: 4_178_020 };
-    const ring = box(523_000, 4_178_000, 523_009.5, 4_178_100);
-    expect(shareInside(far, ring)).toBeCloseTo(0.25, 9);
-    expect(shareInside(far, ring.reverse())).toBeCloseTo(0.25, 9);
-  });
-});
 
 let world: World;
 let neighbour: World;
