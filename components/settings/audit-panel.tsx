@@ -9,7 +9,9 @@ type Props = { projectId: string; first: AuditPage };
 
 /** Who did what and when, newest first: searched on the server, read on page by page, taken away as CSV. */
 export function AuditPanel({ projectId, first }: Props) {
-  const [page, setPage] = useState(first);
+  // Nothing searched yet: the newest as the server last gave them, which a refresh of the page renews.
+  const [found, setFound] = useState<AuditPage | null>(null);
+  const page = found ?? first;
   const [search, setSearch] = useState("");
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState("");
@@ -25,7 +27,7 @@ export function AuditPanel({ projectId, first }: Props) {
     setBusy(false);
     if (!answer?.ok)
       return setProblem(body?.detail ?? "The server cannot be reached just now. Please try again.");
-    setPage({ events: [...keep, ...(body as AuditPage).events], next: body.next });
+    setFound({ events: [...keep, ...(body as AuditPage).events], next: body.next });
   };
   const onSubmit = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();

@@ -14,7 +14,6 @@ export function CriteriaPanel({ projectId, revision, mayChange, criteria }: Prop
       </h2>
       {mayChange && current ? (
         <FieldsForm
-          key={current.number}
           path={`/api/projects/${projectId}/criteria`}
           method="POST"
           revision={revision}
@@ -32,6 +31,7 @@ export function CriteriaPanel({ projectId, revision, mayChange, criteria }: Prop
               ],
             },
           ]}
+          empties={["reason"]}
           submit={`Put criteria ${current.number + 1} in force`}
           said="The new criteria are in force."
         />

@@ -29,12 +29,24 @@ type Props = {
   said: string;
   /** Sends only what was changed, as a PATCH wants it. */
   onlyChanged?: boolean;
+  /** Fields that are emptied once it was taken, such as the reason of this one change. */
+  empties?: readonly string[];
   /** Where to go afterwards; "{id}" stands for the id in the answer. */
   goTo?: string;
 };
 
 /** A form of settings: sends what is in it, keeps what was typed when it is refused, and says what is wrong where it is. */
-export function FieldsForm({ path, method, revision, groups, submit, said, onlyChanged, goTo }: Props) {
+export function FieldsForm({
+  path,
+  method,
+  revision,
+  groups,
+  submit,
+  said,
+  onlyChanged,
+  empties = [],
+  goTo,
+}: Props) {
   const router = useRouter();
   const form = useRef<HTMLFormElement>(null);
   const [busy, setBusy] = useState(false);
@@ -53,6 +65,10 @@ export function FieldsForm({ path, method, revision, groups, submit, said, onlyC
     setRefused(answer.done ? undefined : answer.refused);
     if (answer.done) {
       setDone(true);
+      for (const name of empties) {
+        const input = form.current?.elements.namedItem(name);
+        if (input instanceof HTMLInputElement) input.value = "";
+      }
       if (goTo) router.push(goTo.replace("{id}", answer.body?.id ?? ""));
       router.refresh();
     } else {

@@ -29,11 +29,11 @@ export default async function SettingsPage({ params }: { params: Promise<{ proje
       <h1 className="text-xl">Settings</h1>
       {mayChange ? (
         <FieldsForm
-          key={facts.revision}
           path={`/api/projects/${facts.id}`}
           method="PATCH"
           revision={facts.revision}
           onlyChanged
+          empties={["reason"]}
           groups={[
             ...groups,
             {
@@ -75,7 +75,7 @@ export default async function SettingsPage({ params }: { params: Promise<{ proje
         mayChange={may(context.roles, "member:change")}
         ownId={context.person.id}
       />
-      {audit && <AuditPanel key={audit.events[0]?.seq} projectId={facts.id} first={audit} />}
+      {audit && <AuditPanel projectId={facts.id} first={audit} />}
     </div>
   );
 }
