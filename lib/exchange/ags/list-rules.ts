@@ -108,7 +108,8 @@ function checkCodes({ groups, findings, concatenator }: RuleContext): void {
         if (text === "" || seen.has(text)) continue;
         seen.add(text);
         for (const code of concatenator === "" ? [text] : text.split(concatenator)) {
-          if ((code !== text && seen.has(code)) || listed.has(`${name}\u0001${code}`)) continue;
+          if (code === "" || (code !== text && seen.has(code)) || listed.has(`${name}\u0001${code}`))
+            continue;
           seen.add(code);
           const at = { line, group: group.name, heading: name };
           if (abbreviations) {
