@@ -2,6 +2,7 @@ import { type SQL, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { ProjectId } from "@/lib/contracts/ids";
 import { verifyProject } from "./audit-chain";
+import { alteredRevisions } from "./signed-content";
 
 /** What must hold in every project at every moment. A query answers with one row for each thing that breaks it. */
 export type Invariant = { id: string; sentence: string; broken: (project: ProjectId) => SQL };
@@ -175,7 +176,10 @@ export const invariants: Invariant[] = [
 
 export type Finding = { id: string; sentence: string; what: string[] };
 
-/** Asks every invariant of one project, the audit chain among them; answers with those that are broken. */
+/** Those asked in SQL, and two that hashes are made again for: what was signed, and the audit chain. */
+export const INVARIANT_COUNT = invariants.length + 2;
+
+/** Asks every invariant of one project, the hashes among them; answers with those that are broken. */
 export async function brokenIn(tx: Transaction, project: ProjectId): Promise<Finding[]> {
   // Letters are seen through the relay's door only.
   await tx.execute(sql`select set_config('app.door', 'relay', true)`);
@@ -184,6 +188,9 @@ export async function brokenIn(tx: Transaction, project: ProjectId): Promise<Fin
     const { rows } = await tx.execute<{ what: string }>(broken(project));
     if (rows.length > 0) findings.push({ id, sentence, what: rows.map(({ what }) => what) });
   }
+  const altered = await alteredRevisions(tx, project);
+  if (altered.length > 0)
+    findings.push({ id: "I2", sentence: "a checked revision holds what two people signed", what: altered });
   const chain = await verifyProject(tx, project);
   if (chain.broken)
     findings.push({ id: "I6", sentence: "the audit chain is unbroken", what: [chain.broken.what] });
