@@ -1,5 +1,6 @@
 import { z } from "zod";
 import type { CheckRow, Standing, VerdictWord } from "./checks";
+import { durations, type LoadBasis, loadBases, type StageWord, stages } from "./footing-words";
 import type {
   CheckId,
   DocumentRevisionId,
@@ -21,30 +22,6 @@ const quantity = (what: string, unit: string, least: number, most: number) =>
     .number(`${what} is a number${unit === "" ? "" : `, in ${unit}`}.`)
     .min(least, `${what} is at least ${least}${unit === "" ? "" : ` ${unit}`}.`)
     .max(most, `${what} is at most ${most}${unit === "" ? "" : ` ${unit}`}.`);
-
-/** Footing stages on site, in order. */
-export const stages = ["designed", "issued", "excavated", "formation-accepted", "poured"] as const;
-export type StageWord = (typeof stages)[number];
-
-/** How a stage is written on the screen. */
-export const stageTitles: Record<StageWord, string> = {
-  designed: "designed",
-  issued: "issued for construction",
-  excavated: "excavated",
-  "formation-accepted": "formation accepted",
-  poured: "poured",
-};
-
-/** Bases of loads; a value and the loads checked against it have the same. */
-export const loadBases = ["characteristic-full", "characteristic-reduced", "design-factored"] as const;
-export type LoadBasis = (typeof loadBases)[number];
-export const loadBasisTitles: Record<LoadBasis, string> = {
-  "characteristic-full": "characteristic (service), full variable load",
-  "characteristic-reduced": "characteristic (service), reduced variable load",
-  "design-factored": "design (factored)",
-};
-
-export const durations = ["permanent", "transient", "accidental"] as const;
 
 /** One load combination at the load level: N down positive; momentB tips along the breadth, momentL along the length. */
 export const loadCombination = z.strictObject({

@@ -1,6 +1,6 @@
 import { checkFooting } from "@/lib/check/check-footing";
 import type { FootingCheckInput } from "@/lib/check/input";
-import { loadBasisTitles } from "@/lib/contracts/footings";
+import { loadBasisTitles } from "@/lib/contracts/footing-words";
 import type { GatheredCriteria, ValueTerms } from "./gather";
 import { type CheckedSize, toCheckInput } from "./to-input";
 

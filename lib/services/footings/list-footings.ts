@@ -1,12 +1,12 @@
 import { type SQL, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
+import { stages } from "@/lib/contracts/footing-words";
 import {
   type FootingCounts,
   type FootingList,
   type FootingSort,
   type ListFootingsInput,
   listFootingsInput,
-  stages,
 } from "@/lib/contracts/footings";
 import type { FootingId } from "@/lib/contracts/ids";
 import { assertMay, type Context, inProject } from "../context";

@@ -1,7 +1,8 @@
 import { and, eq, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import * as t from "@/db/schema";
-import { type RecordStageInput, recordStageInput, stages, stageTitles } from "@/lib/contracts/footings";
+import { stages, stageTitles } from "@/lib/contracts/footing-words";
+import { type RecordStageInput, recordStageInput } from "@/lib/contracts/footings";
 import { audit } from "../audit";
 import { assertMay, type Context, inProject } from "../context";
 import { Conflict, Invalid } from "../errors";

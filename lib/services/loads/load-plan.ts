@@ -1,7 +1,7 @@
+import type { LoadBasis } from "@/lib/contracts/footing-words";
 import {
   type ImportChange,
   type ImportRow,
-  type LoadBasis,
   type LoadCombination,
   loadCombinations,
   mark as markField,
