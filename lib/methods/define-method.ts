@@ -6,7 +6,11 @@ import type { ReferenceKey } from "./references";
 export type FieldFacts = { label: string; unit: string };
 
 /** A condition of a method that the inputs do not meet: said, not hidden, and no error. */
-export type MethodFinding = { code: string; severity: "fails" | "outside" | "warning" | "note"; message: string };
+export type MethodFinding = {
+  code: string;
+  severity: "fails" | "outside" | "warning" | "note";
+  message: string;
+};
 
 export type Method<Inputs = unknown, Outputs = unknown> = {
   readonly id: string;
@@ -35,7 +39,14 @@ export const defineMethod = <Inputs, Outputs>(method: {
   lines?: (inputs: Inputs) => Line[];
 }): Method<Inputs, Outputs> => method;
 
-type NumberRange = { label: string; unit?: string; above?: number; min?: number; below?: number; max?: number };
+type NumberRange = {
+  label: string;
+  unit?: string;
+  above?: number;
+  min?: number;
+  below?: number;
+  max?: number;
+};
 
 /** A number with its label, unit and range; what is refused is refused in a sentence. */
 export function quantity({ label, unit = "", above, min, below, max }: NumberRange) {
@@ -77,6 +88,7 @@ export function inputError(error: z.ZodError): {
     else fields[issue.path.join(".") || "inputs"] ??= issue.message;
   }
   const names = Object.keys(fields);
-  const message = names.length === 1 ? `One input cannot be used: ${names[0]}.` : `${names.length} inputs cannot be used.`;
+  const message =
+    names.length === 1 ? `One input cannot be used: ${names[0]}.` : `${names.length} inputs cannot be used.`;
   return { code: "invalid", message, fields };
 }

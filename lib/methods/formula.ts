@@ -36,7 +36,10 @@ export function line<Quantities extends Record<string, number>>(
   quantities: Quantities,
 ): Line {
   const names = Object.keys(formula.symbols).sort((one, other) => other.length - one.length);
-  const pattern = new RegExp(names.map((name) => name.replace(/[.*+?^${}()|[\]\\]/g, "\\$&")).join("|"), "gu");
+  const pattern = new RegExp(
+    names.map((name) => name.replace(/[.*+?^${}()|[\]\\]/g, "\\$&")).join("|"),
+    "gu",
+  );
   const numbers =
     names.length === 0
       ? formula.shown
@@ -60,6 +63,8 @@ export function figure(value: number): string {
   if (!Number.isFinite(value)) return "—";
   const size = Math.abs(value);
   const text =
-    size !== 0 && (size < 1e-4 || size >= 1e7) ? value.toExponential(4) : String(Number(value.toPrecision(5)));
+    size !== 0 && (size < 1e-4 || size >= 1e7)
+      ? value.toExponential(4)
+      : String(Number(value.toPrecision(5)));
   return value < 0 ? `(${text.replace("-", "−")})` : text;
 }

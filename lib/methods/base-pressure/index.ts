@@ -95,6 +95,9 @@ function distributionOf(plane: PressurePlane, eB: number, eL: number, kern: numb
   return plane.zone === "full" ? "trapezoidal" : "partial";
 }
 
+/** A corner that the line passes through belongs to it, whatever the last digits say. */
+const nearZero = (value: number, peak: number): number => (Math.abs(value) <= 1e-12 * peak ? 0 : value);
+
 /** The contact area as points from the centre of the base, anticlockwise, and the line where the pressure ends. */
 export function contactOutline(load: BaseLoad): {
   contactPolygon_m: [number, number][];
@@ -121,9 +124,10 @@ export function contactOutline(load: BaseLoad): {
   for (let at = 0; at < 4; at += 1) {
     const [u0, v0] = corners[at] as [number, number];
     const [u1, v1] = corners[(at + 1) % 4] as [number, number];
-    const s0 = plane.a + b * u0 + c * v0;
-    const s1 = plane.a + b * u1 + c * v1;
+    const s0 = nearZero(plane.a + b * u0 + c * v0, plane.peak);
+    const s1 = nearZero(plane.a + b * u1 + c * v1, plane.peak);
     if (s0 >= 0) outline.push([u0 * breadth_m, v0 * length_m]);
+    if (s0 === 0) crossings.push([u0 * breadth_m, v0 * length_m]);
     if (s0 > 0 !== s1 > 0 && s0 !== 0 && s1 !== 0) {
       const share = s0 / (s0 - s1);
       const point: [number, number] = [
@@ -196,14 +200,26 @@ export function basePressureLines(load: BaseLoad): Line[] {
   steps.push(line(kernSum, { breadth_m, length_m, eccentricityB_m, eccentricityL_m }));
   if (!solved.equilibrium || solved.maxPressure_kPa === null) return steps;
   if (solved.contactRatio === 1)
-    steps.push(line(peakPressureFull, { vertical_kN, breadth_m, length_m, eccentricityB_m, eccentricityL_m }));
+    steps.push(
+      line(peakPressureFull, { vertical_kN, breadth_m, length_m, eccentricityB_m, eccentricityL_m }),
+    );
   else if (eccentricityL_m === 0)
     steps.push(
-      line(peakPressurePartial, { vertical_kN, width_m: length_m, side_m: breadth_m, eccentricity_m: eccentricityB_m }),
+      line(peakPressurePartial, {
+        vertical_kN,
+        width_m: length_m,
+        side_m: breadth_m,
+        eccentricity_m: eccentricityB_m,
+      }),
     );
   else if (eccentricityB_m === 0)
     steps.push(
-      line(peakPressurePartial, { vertical_kN, width_m: breadth_m, side_m: length_m, eccentricity_m: eccentricityL_m }),
+      line(peakPressurePartial, {
+        vertical_kN,
+        width_m: breadth_m,
+        side_m: length_m,
+        eccentricity_m: eccentricityL_m,
+      }),
     );
   else {
     const peakFactor = (solved.maxPressure_kPa * breadth_m * length_m) / vertical_kN;

@@ -54,7 +54,16 @@ function cornerContact(xi: number, eta: number): PressurePlane {
   const peak = 6 / (p * q);
   const b = peak / p;
   const c = peak / q;
-  return { a: peak - b / 2 - c / 2, b, c, peak, least: 0, contactRatio: (p * q) / 2, zone: "one corner", residual: 0 };
+  return {
+    a: peak - b / 2 - c / 2,
+    b,
+    c,
+    peak,
+    least: 0,
+    contactRatio: (p * q) / 2,
+    zone: "one corner",
+    residual: 0,
+  };
 }
 
 /** One whole side in contact: a trapezoid of mean depth l0 whose depth grows along the side by the slope t. */
@@ -116,7 +125,11 @@ function farCornerLifts(xi: number, eta: number): PressurePlane {
     let scale = 1;
     while (
       scale > 1e-6 &&
-      !(b - scale * db > 0 && c - scale * dc > 0 && (b - scale * db) / 2 + (c - scale * dc) / 2 - (a - scale * da) > 0)
+      !(
+        b - scale * db > 0 &&
+        c - scale * dc > 0 &&
+        (b - scale * db) / 2 + (c - scale * dc) / 2 - (a - scale * da) > 0
+      )
     )
       scale /= 2;
     const moved = Math.abs(scale * da) / Math.abs(a) + Math.abs(scale * db) / b + Math.abs(scale * dc) / c;

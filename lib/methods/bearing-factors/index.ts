@@ -8,13 +8,17 @@ const degree = Math.PI / 180;
 
 /** Nγ for Terzaghi's mechanism by whole degrees from 0 to 50 (Kumbhojkar 1993; it has no closed form; from memory). */
 const terzaghiNGamma = [
-  0, 0.01, 0.04, 0.06, 0.1, 0.14, 0.2, 0.27, 0.35, 0.44, 0.56, 0.69, 0.85, 1.04, 1.26, 1.52, 1.82, 2.18, 2.59, 3.07,
-  3.64, 4.31, 5.09, 6.0, 7.08, 8.34, 9.84, 11.6, 13.7, 16.18, 19.13, 22.65, 26.87, 31.94, 38.04, 45.41, 54.36, 65.27,
-  78.61, 95.03, 115.31, 140.51, 171.99, 211.56, 261.6, 325.34, 407.11, 512.84, 650.67, 831.99, 1072.8,
+  0, 0.01, 0.04, 0.06, 0.1, 0.14, 0.2, 0.27, 0.35, 0.44, 0.56, 0.69, 0.85, 1.04, 1.26, 1.52, 1.82, 2.18, 2.59,
+  3.07, 3.64, 4.31, 5.09, 6.0, 7.08, 8.34, 9.84, 11.6, 13.7, 16.18, 19.13, 22.65, 26.87, 31.94, 38.04, 45.41,
+  54.36, 65.27, 78.61, 95.03, 115.31, 140.51, 171.99, 211.56, 261.6, 325.34, 407.11, 512.84, 650.67, 831.99,
+  1072.8,
 ];
 
 /** Bearing capacity factors of one author; never mixed with another's shape, depth or inclination. */
-export function bearingFactorsOf(theory: Theory, frictionAngle_deg: number): { nc: number; nq: number; nGamma: number } {
+export function bearingFactorsOf(
+  theory: Theory,
+  frictionAngle_deg: number,
+): { nc: number; nq: number; nGamma: number } {
   const phi = frictionAngle_deg * degree;
   const tangent = Math.tan(phi);
   if (theory === "terzaghi") {
@@ -59,7 +63,9 @@ export const bearingFactors = defineMethod({
     "Terzaghi's Nγ is read from Kumbhojkar's table by whole degrees, logarithmically between them.",
   ],
   inputs: z.strictObject({
-    theory: z.enum(theories, { error: `Theory must be one of ${theories.join(", ")}.` }).meta({ label: "Theory", unit: "" }),
+    theory: z
+      .enum(theories, { error: `Theory must be one of ${theories.join(", ")}.` })
+      .meta({ label: "Theory", unit: "" }),
     frictionAngle_deg: quantity({ label: "Angle of friction φ", unit: "°", min: 0, max: 50 }),
   }),
   outputs: z.object({ nc: output("Nc"), nq: output("Nq"), nGamma: output("Nγ") }),

@@ -82,7 +82,8 @@ export function bearingResistanceOf(given: BearingCase) {
 /** Factors for a tilted underside; Terzaghi and Meyerhof give none. */
 function baseFactors(given: BearingCase, nc: number, frictionAngle_deg: number, undrained: boolean) {
   const tilt = given.baseTilt_deg * degree;
-  if (tilt === 0 || given.theory === "terzaghi" || given.theory === "meyerhof") return { c: 1, q: 1, gamma: 1 };
+  if (tilt === 0 || given.theory === "terzaghi" || given.theory === "meyerhof")
+    return { c: 1, q: 1, gamma: 1 };
   if (undrained) return { c: 1 - (2 * tilt) / (Math.PI + 2), q: 1, gamma: 1 };
   const tangent = Math.tan(frictionAngle_deg * degree);
   if (given.theory === "hansen") {
@@ -104,7 +105,9 @@ function weightBelow(given: BearingCase): number {
 
 const inputs = z
   .strictObject({
-    theory: z.enum(theories, { error: `Theory must be one of ${theories.join(", ")}.` }).meta({ label: "Theory", unit: "" }),
+    theory: z
+      .enum(theories, { error: `Theory must be one of ${theories.join(", ")}.` })
+      .meta({ label: "Theory", unit: "" }),
     drainage: z
       .enum(["drained", "undrained"], { error: "Drainage must be drained or undrained." })
       .meta({ label: "Drainage", unit: "" }),
@@ -118,7 +121,10 @@ const inputs = z
     vertical_kN: quantity({ label: "Vertical load", unit: "kN", min: 0 }).nullable().default(null),
     horizontal_kN: quantity({ label: "Horizontal load", unit: "kN", min: 0 }).default(0),
     horizontalAlong: z
-      .union([z.enum(["breadth", "length"]), quantity({ label: "Direction of the horizontal load", unit: "°", min: 0, max: 90 })])
+      .union([
+        z.enum(["breadth", "length"]),
+        quantity({ label: "Direction of the horizontal load", unit: "°", min: 0, max: 90 }),
+      ])
       .default("breadth")
       .meta({ label: "Direction of the horizontal load (degrees from the length axis)", unit: "" }),
     baseTilt_deg: quantity({ label: "Tilt of the base", unit: "°", min: 0, below: 45 }).default(0),

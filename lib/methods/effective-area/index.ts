@@ -23,8 +23,14 @@ export function effectiveAreaOf(given: {
   const { breadth_m, length_m } = given;
   const eccentricityB_m = Math.abs(given.eccentricityB_m);
   const eccentricityL_m = Math.abs(given.eccentricityL_m);
-  const effectiveBreadth_m = Math.max(0, effectiveSide.of({ side_m: breadth_m, eccentricity_m: eccentricityB_m }));
-  const effectiveLength_m = Math.max(0, effectiveSide.of({ side_m: length_m, eccentricity_m: eccentricityL_m }));
+  const effectiveBreadth_m = Math.max(
+    0,
+    effectiveSide.of({ side_m: breadth_m, eccentricity_m: eccentricityB_m }),
+  );
+  const effectiveLength_m = Math.max(
+    0,
+    effectiveSide.of({ side_m: length_m, eccentricity_m: eccentricityL_m }),
+  );
   return { effectiveBreadth_m, effectiveLength_m, effectiveArea_m2: effectiveBreadth_m * effectiveLength_m };
 }
 
@@ -51,6 +57,9 @@ export const effectiveArea = defineMethod({
   compute: effectiveAreaOf,
   lines: (q) => [
     line(effectiveSide, { side_m: q.breadth_m, eccentricity_m: Math.abs(q.eccentricityB_m) }),
-    { ...line(effectiveSide, { side_m: q.length_m, eccentricity_m: Math.abs(q.eccentricityL_m) }), symbol: "L′" },
+    {
+      ...line(effectiveSide, { side_m: q.length_m, eccentricity_m: Math.abs(q.eccentricityL_m) }),
+      symbol: "L′",
+    },
   ],
 });

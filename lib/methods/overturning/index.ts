@@ -22,8 +22,14 @@ export function overturningFactors(q: {
   momentL_kNm: number;
 }) {
   const { vertical_kN } = q;
-  const factorOfSafetyB = factorOver(holdingMoment.of({ vertical_kN, side_m: q.breadth_m }), Math.abs(q.momentB_kNm));
-  const factorOfSafetyL = factorOver(holdingMoment.of({ vertical_kN, side_m: q.length_m }), Math.abs(q.momentL_kNm));
+  const factorOfSafetyB = factorOver(
+    holdingMoment.of({ vertical_kN, side_m: q.breadth_m }),
+    Math.abs(q.momentB_kNm),
+  );
+  const factorOfSafetyL = factorOver(
+    holdingMoment.of({ vertical_kN, side_m: q.length_m }),
+    Math.abs(q.momentL_kNm),
+  );
   const factorOfSafety =
     factorOfSafetyB === null
       ? factorOfSafetyL

@@ -11,7 +11,13 @@ export const slidingResistance = formula({
   ref: "gec6",
   where: "Eq. 5-38",
   shown: "V tan δ + a A + P",
-  symbols: { V: "vertical_kN", δ: "interfaceAngle_deg", a: "adhesion_kPa", A: "contactArea_m2", P: "passive_kN" },
+  symbols: {
+    V: "vertical_kN",
+    δ: "interfaceAngle_deg",
+    a: "adhesion_kPa",
+    A: "contactArea_m2",
+    P: "passive_kN",
+  },
   of: (q: {
     vertical_kN: number;
     interfaceAngle_deg: number;
@@ -19,7 +25,9 @@ export const slidingResistance = formula({
     contactArea_m2: number;
     passive_kN: number;
   }) =>
-    q.vertical_kN * Math.tan(q.interfaceAngle_deg * degree) + q.adhesion_kPa * q.contactArea_m2 + q.passive_kN,
+    q.vertical_kN * Math.tan(q.interfaceAngle_deg * degree) +
+    q.adhesion_kPa * q.contactArea_m2 +
+    q.passive_kN,
 });
 
 /** Both directions act at once: the vector sum. */
@@ -29,17 +37,24 @@ export const slidingApplied = formula({
   ref: "statics",
   shown: "√(H_B² + H_L²)",
   symbols: { H_B: "horizontalB_kN", H_L: "horizontalL_kN" },
-  of: (q: { horizontalB_kN: number; horizontalL_kN: number }) => Math.hypot(q.horizontalB_kN, q.horizontalL_kN),
+  of: (q: { horizontalB_kN: number; horizontalL_kN: number }) =>
+    Math.hypot(q.horizontalB_kN, q.horizontalL_kN),
 });
 
 /** Resistance over what is applied; null when nothing is applied. */
-export const factorOver = (capacity: number, demand: number): number | null => (demand > 0 ? capacity / demand : null);
+export const factorOver = (capacity: number, demand: number): number | null =>
+  demand > 0 ? capacity / demand : null;
 
 const inputs = z.strictObject({
   vertical_kN: quantity({ label: "Effective vertical load", unit: "kN", min: 0 }),
   horizontalB_kN: quantity({ label: "Horizontal load along B", unit: "kN" }),
   horizontalL_kN: quantity({ label: "Horizontal load along L", unit: "kN" }),
-  interfaceAngle_deg: quantity({ label: "Angle of friction under the base δ", unit: "°", min: 0, below: 90 }).default(0),
+  interfaceAngle_deg: quantity({
+    label: "Angle of friction under the base δ",
+    unit: "°",
+    min: 0,
+    below: 90,
+  }).default(0),
   adhesion_kPa: quantity({ label: "Adhesion a", unit: "kPa", min: 0 }).default(0),
   contactArea_m2: quantity({ label: "Area in contact", unit: "m²", min: 0 }).default(0),
   passive_kN: quantity({ label: "Passive resistance counted", unit: "kN", min: 0 }).default(0),

@@ -18,7 +18,9 @@ export const uplift = defineMethod({
   version: "1",
   title: "Uplift by water and by pull",
   source: ["statics"],
-  limits: ["Weights count either total against full water pressure or submerged without it, never a mixture."],
+  limits: [
+    "Weights count either total against full water pressure or submerged without it, never a mixture.",
+  ],
   inputs: z.strictObject({
     stabilising_kN: quantity({ label: "Weight and load that hold down", unit: "kN", min: 0 }),
     uplift_kN: quantity({ label: "Water pressure and pull that lift", unit: "kN", min: 0 }),

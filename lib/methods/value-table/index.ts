@@ -37,7 +37,12 @@ function bracket(points: number[], at: number): [number, number, number] | "belo
   return [0, 0, 0];
 }
 
-function outside(what: "breadth" | "depth", side: "below" | "above", points: number[], at: number): TableReading {
+function outside(
+  what: "breadth" | "depth",
+  side: "below" | "above",
+  points: number[],
+  at: number,
+): TableReading {
   const limit = side === "below" ? points[0] : points.at(-1);
   return {
     outside: true,
@@ -95,6 +100,10 @@ export const valueTable = defineMethod({
   }),
   compute: (q) => {
     const reading = readTable(q, q);
-    return { outside: reading.outside, limit: reading.outside ? reading.limit : null, netAllowable_kPa: reading.netAllowable_kPa };
+    return {
+      outside: reading.outside,
+      limit: reading.outside ? reading.limit : null,
+      netAllowable_kPa: reading.netAllowable_kPa,
+    };
   },
 });

@@ -1,0 +1,49 @@
+import { createInterface } from "node:readline";
+import { z } from "zod";
+import { allMethods, runMethod } from "@/lib/check/all-methods";
+
+/**
+ * `npm run -s calc`: one JSON object a line on standard input, `{"method": "<id>", "inputs": {…}}`, one line each on
+ * standard output, `{"outputs": {…}}` or `{"error": {…}}`. A bad line is answered, never fatal. `--list` prints the ids.
+ */
+function answer(text: string): unknown {
+  let asked: unknown;
+  try {
+    asked = JSON.parse(text);
+  } catch {
+    return { error: { code: "invalid", message: "This line is not well-formed JSON.", fields: {} } };
+  }
+  if (
+    asked === null ||
+    typeof asked !== "object" ||
+    typeof (asked as { method?: unknown }).method !== "string"
+  )
+    return {
+      error: {
+        code: "invalid",
+        message: 'A line is {"method": "<id>", "inputs": {…}}.',
+        fields: { method: "Missing." },
+      },
+    };
+  const { method, inputs } = asked as { method: string; inputs?: unknown };
+  try {
+    return runMethod(method, inputs ?? {});
+  } catch (error) {
+    return { error: { code: "failed", message: String((error as Error).message), fields: {} } };
+  }
+}
+
+if (process.argv.includes("--list")) {
+  for (const { id, version, title, inputs, outputs } of allMethods) {
+    const fields = (schema: z.ZodType, io: "input" | "output") =>
+      Object.keys(
+        (z.toJSONSchema(schema, { io, unrepresentable: "any" }) as { properties?: object }).properties ?? {},
+      );
+    process.stdout.write(
+      `${JSON.stringify({ id, version, title, inputs: fields(inputs, "input"), outputs: fields(outputs, "output") })}\n`,
+    );
+  }
+} else {
+  for await (const text of createInterface({ input: process.stdin, crlfDelay: Number.POSITIVE_INFINITY }))
+    if (text.trim() !== "") process.stdout.write(`${JSON.stringify(answer(text))}\n`);
+}
