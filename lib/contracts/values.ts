@@ -287,3 +287,19 @@ export type Coverage = {
   footingsOnUnconfirmed: Gap<{ id: string; mark: string }>;
 };
 type Gap<Item> = { total: number; first: Item[] };
+
+/** Places that have no value yet. */
+export type NewValueChoices = {
+  places: { zoneId: ZoneId; zone: string; groundUnitId: GroundUnitId; groundUnit: string }[];
+};
+
+/** Documents that a draft can cite, in their current revision. */
+export type DraftChoices = {
+  documents: {
+    documentRevisionId: DocumentRevisionId;
+    reference: string;
+    title: string;
+    code: string;
+    pages: number | null;
+  }[];
+};

@@ -1,11 +1,12 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { OutcomeCounts } from "@/lib/contracts/changes";
+import { countsInWords } from "@/lib/contracts/counts-in-words";
 import type { ChangeId, PersonId } from "@/lib/contracts/ids";
 import { env } from "@/lib/env";
 import type { Context } from "../context";
 import { queueMail } from "../outbox";
-import { countsInWords, noCounts } from "./outcome";
+import { noCounts } from "./outcome";
 
 /** What one owner's footings came to; "" stands for footings that nobody owns. */
 export type TallyByOwner = Map<PersonId | "", OutcomeCounts>;

@@ -20,18 +20,3 @@ export const noCounts = (): OutcomeCounts => ({
   recovers: 0,
   holds: 0,
 });
-
-/** "3 now fail, 1 outside conditions, 116 hold": the outcomes that occur, in the order of concern. */
-export function countsInWords(counts: OutcomeCounts): string {
-  const parts = [
-    [counts["now fails"], "now fails", "now fail"],
-    [counts["still fails"], "still fails", "still fail"],
-    [counts["outside conditions"], "outside conditions", "outside conditions"],
-    [counts.recovers, "recovers", "recover"],
-    [counts.holds, "holds", "hold"],
-  ] as const;
-  const said = parts
-    .filter(([count]) => count > 0)
-    .map(([count, one, many]) => `${count} ${count === 1 ? one : many}`);
-  return said.length === 0 ? "no linked footing" : said.join(", ");
-}

@@ -104,7 +104,10 @@ function outsideOf(trial: JudgedTerms): SQL {
   if (trial.maxBreadth_m !== null)
     conditions.push(sql`least(g.breadth_m, g.length_m) > ${trial.maxBreadth_m}::float8`);
   if (trial.minFoundingDepth_m !== null)
-    conditions.push(sql`g.ground_level_m - g.founding_level_m < ${trial.minFoundingDepth_m}::float8`);
+    conditions.push(
+      // A depth is a difference of two levels: the check forgives it the last digits, and so does this.
+      sql`g.ground_level_m - g.founding_level_m < ${trial.minFoundingDepth_m}::float8 - 1e-9`,
+    );
   if (trial.highestFoundingLevel_m !== null)
     conditions.push(sql`g.founding_level_m > ${trial.highestFoundingLevel_m}::float8`);
   if (trial.lowestFoundingLevel_m !== null)
