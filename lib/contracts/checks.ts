@@ -1,4 +1,6 @@
 import { z } from "zod";
+import type { Explained } from "@/lib/check/explain-check";
+import type { FootingCheckInput, FootingCheckResult } from "@/lib/check/input";
 import type { CheckId, FootingId, ValueId, ValueRevisionId } from "./ids";
 
 const uuid = <Brand extends string>() =>
@@ -64,4 +66,43 @@ export type CheckRow = {
   engineVersion: string;
   standing: Standing;
   reasons: string[];
+};
+
+/** What the register knows beyond the figures: bases that must agree, levels that must hold, doubts that must be said. */
+export type RegisterConditions = {
+  reference: string;
+  code: string;
+  loadBasis: string;
+  valueLoadBasis: string;
+  highestFoundingLevel_m: number | null;
+  lowestFoundingLevel_m: number | null;
+  basis: "recommended" | "assumed" | "presumptive";
+  purpose: "preliminary" | "for-design";
+  confirmBy: string | null;
+  confirmWho: string | null;
+  /** Names of the holes whose logs the check pins, the nearest first; null where they were not looked for. */
+  holesNear: string[] | null;
+  nearestHoleLimit_m: number;
+};
+
+/** Exactly what a check was given. `npm run replay` runs it again from this and compares every digit. */
+export type CheckSnapshot = { input: FootingCheckInput; register: RegisterConditions };
+
+/** A stored check whole, with the steps of its calculation and, for each combination, where the base is in contact. */
+export type CheckDetail = CheckRow & {
+  snapshot: CheckSnapshot;
+  result: FootingCheckResult;
+  explained: Explained;
+  contactPolygons_m: [alongB_m: number, alongL_m: number][][];
+  value: {
+    zone: string;
+    groundUnit: string;
+    soil: string;
+    basis: RegisterConditions["basis"];
+    conditions: string;
+    given: string;
+    givenBasis: "net" | "gross";
+    governedBy: string;
+    sources: { reference: string; code: string; page: number | null; clause: string }[];
+  };
 };

@@ -1,9 +1,10 @@
 import { sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
+import type { FootingCheckResult } from "@/lib/check/input";
 import { ENGINE_VERSION } from "@/lib/check/version";
+import type { CheckSnapshot } from "@/lib/contracts/checks";
 import type { ProjectId } from "@/lib/contracts/ids";
 import { type Difference, replayCheck } from "./replay";
-import type { CheckResult, CheckSnapshot } from "./run-check";
 
 /** Checks are read this many at a time, so that memory does not grow with the register. */
 const BATCH = 500;
@@ -50,7 +51,7 @@ type Stored = {
   mark: string;
   engineVersion: string;
   snapshot: CheckSnapshot;
-  result: CheckResult;
+  result: FootingCheckResult;
   verdict: string;
   utilisation: number | null;
   utilisationBearing: number | null;

@@ -1,7 +1,9 @@
-import { type CheckResult, type CheckSnapshot, runCheck } from "./run-check";
+import type { FootingCheckResult } from "@/lib/check/input";
+import type { CheckSnapshot } from "@/lib/contracts/checks";
+import { runCheck } from "./run-check";
 
 /** Where a stored result differs from the one computed now; empty when every digit is the same. */
-export function replayCheck(stored: { snapshot: CheckSnapshot; result: CheckResult }): Difference[] {
+export function replayCheck(stored: { snapshot: CheckSnapshot; result: FootingCheckResult }): Difference[] {
   // What is stored has been through JSON, so what is computed goes through it too.
   const now: unknown = JSON.parse(JSON.stringify(runCheck(stored.snapshot)));
   const differences: Difference[] = [];

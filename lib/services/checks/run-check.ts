@@ -1,31 +1,9 @@
 import { checkFooting } from "@/lib/check/check-footing";
-import type { FootingCheckInput } from "@/lib/check/input";
+import type { Finding, FootingCheckInput, FootingCheckResult } from "@/lib/check/input";
+import type { CheckSnapshot, RegisterConditions } from "@/lib/contracts/checks";
 import { loadBasisTitles } from "@/lib/contracts/footing-words";
 import type { GatheredCriteria, ValueTerms } from "./gather";
 import { type CheckedSize, toCheckInput } from "./to-input";
-
-export type CheckResult = ReturnType<typeof checkFooting>;
-export type CheckFinding = CheckResult["findings"][number];
-
-/** What the register knows beyond the figures: bases that must agree, levels that must hold, doubts that must be said. */
-export type RegisterConditions = {
-  reference: string;
-  code: string;
-  loadBasis: string;
-  valueLoadBasis: string;
-  highestFoundingLevel_m: number | null;
-  lowestFoundingLevel_m: number | null;
-  basis: ValueTerms["basis"];
-  purpose: ValueTerms["purpose"];
-  confirmBy: string | null;
-  confirmWho: string | null;
-  /** Names of the holes whose logs the check pins, the nearest first; null where they were not looked for. */
-  holesNear: string[] | null;
-  nearestHoleLimit_m: number;
-};
-
-/** Exactly what a check was given. `npm run replay` runs it again from this and compares every digit. */
-export type CheckSnapshot = { input: FootingCheckInput; register: RegisterConditions };
 
 /** Brings a stored footing, a value revision and the criteria into what a check is given. */
 export function snapshotOf(
@@ -58,7 +36,7 @@ export function snapshotOf(
  * another basis than the value's, or a founding level outside its range, put the footing outside its conditions
  * whatever the figures say. Pure: the same snapshot gives the same result.
  */
-export function runCheck(snapshot: CheckSnapshot): CheckResult {
+export function runCheck(snapshot: CheckSnapshot): FootingCheckResult {
   const result = checkFooting(snapshot.input);
   const outside = outsideConditions(snapshot);
   const doubts = doubtsAbout(snapshot.register);
@@ -70,11 +48,15 @@ export function runCheck(snapshot: CheckSnapshot): CheckResult {
   };
 }
 
-const finding = (code: string, severity: CheckFinding["severity"], message: string): CheckFinding =>
-  ({ code, severity, message, combination: null }) as CheckFinding;
+const finding = (code: string, severity: Finding["severity"], message: string): Finding => ({
+  code,
+  severity,
+  message,
+  combination: null,
+});
 
-function outsideConditions({ input, register }: CheckSnapshot): CheckFinding[] {
-  const found: CheckFinding[] = [];
+function outsideConditions({ input, register }: CheckSnapshot): Finding[] {
+  const found: Finding[] = [];
   const { loadBasis, valueLoadBasis, highestFoundingLevel_m, lowestFoundingLevel_m } = register;
   const level_m = input.footing.foundingLevel_m;
   if (loadBasis !== valueLoadBasis)
@@ -104,9 +86,9 @@ function outsideConditions({ input, register }: CheckSnapshot): CheckFinding[] {
   return found;
 }
 
-function doubtsAbout(register: RegisterConditions): CheckFinding[] {
+function doubtsAbout(register: RegisterConditions): Finding[] {
   const { reference, code, basis, purpose, confirmWho, confirmBy, holesNear, nearestHoleLimit_m } = register;
-  const found: CheckFinding[] = [];
+  const found: Finding[] = [];
   if (basis !== "recommended") {
     const by = [confirmWho && ` by ${confirmWho}`, confirmBy && ` until ${confirmBy}`]
       .filter(Boolean)

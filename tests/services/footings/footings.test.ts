@@ -1,6 +1,7 @@
 import { randomUUID } from "node:crypto";
 import { sql } from "drizzle-orm";
 import { beforeAll, beforeEach, describe, expect, it } from "vitest";
+import type { CreateFootingInput } from "@/lib/contracts/footings";
 import type { FootingId, ValueId } from "@/lib/contracts/ids";
 import { runChecks } from "@/lib/services/checks/run-checks";
 import { createFooting } from "@/lib/services/footings/create-footing";
@@ -93,7 +94,9 @@ describe("registering a footing", () => {
       "loads.combinations.1.name",
     ],
   ])("refuses %s at its field and writes nothing", async (_, over, field) => {
-    const refused = await refusalOf(createFooting(world.structural, padInput("F1", over)));
+    const refused = await refusalOf(
+      createFooting(world.structural, padInput("F1", over as Partial<CreateFootingInput>)),
+    );
     expect(refused.status).toBe(400);
     expect(Object.keys(refused.fields)).toContain(field);
     expect(await countOf(world, "footing")).toBe(0);
