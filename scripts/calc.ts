@@ -4,7 +4,8 @@ import { allMethods, runMethod } from "@/lib/check/all-methods";
 
 /**
  * `npm run -s calc`: one JSON object a line on standard input, `{"method": "<id>", "inputs": {…}}`, one line each on
- * standard output, `{"outputs": {…}}` or `{"error": {…}}`. A bad line is answered, never fatal. `--list` prints the ids.
+ * standard output, `{"outputs": {…}}` or `{"error": {…}}`, with `findings` beside the outputs where a limit of the method is not kept. A bad
+ * line is answered, never fatal. `--list` prints the ids and fields; `--lines` adds the steps with their numbers.
  */
 function answer(text: string): unknown {
   let asked: unknown;
@@ -27,7 +28,14 @@ function answer(text: string): unknown {
     };
   const { method, inputs } = asked as { method: string; inputs?: unknown };
   try {
-    return runMethod(method, inputs ?? {});
+    const given = runMethod(method, inputs ?? {});
+    if ("error" in given) return given;
+    const { outputs, findings, lines } = given;
+    return {
+      outputs,
+      ...(findings.length > 0 ? { findings } : {}),
+      ...(process.argv.includes("--lines") ? { lines } : {}),
+    };
   } catch (error) {
     return { error: { code: "failed", message: String((error as Error).message), fields: {} } };
   }

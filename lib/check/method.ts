@@ -1,6 +1,6 @@
 import { defineMethod } from "@/lib/methods/define-method";
 import { checkFooting } from "./check-footing";
-import { type FootingCheckInput, footingCheckInput, footingCheckOutput } from "./input";
+import { footingCheckInput, footingCheckOutput } from "./input";
 import { ENGINE_VERSION } from "./version";
 
 /** The whole check as a method of the list. */
@@ -13,7 +13,7 @@ export const footingCheck = defineMethod({
     "A rigid base with linear pressure; not for rock joints, slopes, machines, collapsible or expansive ground.",
     "Service loads at the column base; the value is net and on the same load basis.",
   ],
-  inputs: footingCheckInput as never,
-  outputs: footingCheckOutput as never,
-  compute: (input: FootingCheckInput) => checkFooting(input),
+  inputs: footingCheckInput,
+  outputs: footingCheckOutput,
+  compute: checkFooting,
 });
