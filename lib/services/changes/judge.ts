@@ -16,8 +16,12 @@ export const WITHOUT_VALUE: Judged = {
 
 /** The verdict of a footing's check against these terms, as a stored check of it would have it. */
 export function judge(footing: GatheredFooting, terms: JudgedTerms, criteria: GatheredCriteria): Judged {
-  const { combinations, loadBasis } = footing;
-  if (combinations === null || loadBasis === null) throw new Error(`${footing.mark} has no loads to judge.`);
+  if (!hasLoads(footing)) throw new Error(`${footing.mark} has no loads to judge.`);
   // Holes near a footing are a remark of the check, never its verdict: they are not looked for here.
-  return runCheck(snapshotOf({ ...footing, combinations, loadBasis }, terms, criteria, null));
+  return runCheck(snapshotOf(footing, terms, criteria, null));
 }
+
+type Loaded = GatheredFooting & { combinations: string; loadBasis: string };
+
+const hasLoads = (footing: GatheredFooting): footing is Loaded =>
+  footing.combinations !== null && footing.loadBasis !== null;

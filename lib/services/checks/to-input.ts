@@ -53,7 +53,7 @@ export function toCheckInput(
       backfillUnitWeight_kNm3: footing.backfillUnitWeight_kNm3,
     },
     loads,
-    value: toCheckedValue(terms),
+    value: checkedValueOf(terms),
     criteria: {
       slidingFactor: criteria.slidingFactor,
       overturningFactor: criteria.overturningFactor,
@@ -65,6 +65,17 @@ export function toCheckInput(
       accidentalMinContactRatio: criteria.accidentalMinContactRatio,
     },
   };
+}
+
+/** Ten thousand footings stand on one revision: its terms are brought into form once and shared, never changed. */
+const formed = new WeakMap<CheckedTerms, FootingCheckInput["value"]>();
+
+function checkedValueOf(terms: CheckedTerms): FootingCheckInput["value"] {
+  const known = formed.get(terms);
+  if (known) return known;
+  const value = toCheckedValue(terms);
+  formed.set(terms, value);
+  return value;
 }
 
 function toCheckedValue(terms: CheckedTerms): FootingCheckInput["value"] {
