@@ -3,18 +3,11 @@
 import type { FormEvent } from "react";
 import type { FootingFilter } from "@/lib/client/use-footings";
 import { stageTitles } from "@/lib/contracts/footing-words";
-import type { FootingCounts } from "@/lib/contracts/footings";
-
-export type Choices = {
-  zones: { id: string; name: string }[];
-  groundUnits: { id: string; code: string; name: string }[];
-  owners: { id: string; name: string }[];
-  values: { id: string; reference: string; label: string }[];
-};
+import type { FootingChoices, FootingCounts } from "@/lib/contracts/footings";
 
 type Props = {
   filter: FootingFilter;
-  choices: Choices;
+  choices: FootingChoices;
   counts: FootingCounts | null;
   onChange: (filter: FootingFilter) => void;
 };

@@ -7,10 +7,10 @@ import { Notice } from "@/components/account/notice";
 import { useRunChecks } from "@/lib/client/use-checks";
 import { allFootingIds, type FootingFilter, useFootings } from "@/lib/client/use-footings";
 import type { RunChecksAnswer } from "@/lib/contracts/checks";
-import type { FootingList } from "@/lib/contracts/footings";
+import type { FootingChoices, FootingList } from "@/lib/contracts/footings";
 import { CheckAnswer } from "./check-answer";
 import { CountsLine } from "./counts-line";
-import { type Choices, FilterBar } from "./filter-bar";
+import { FilterBar } from "./filter-bar";
 import { FootingTable } from "./footing-table";
 import { ImportDialog } from "./import-dialog";
 import { LinkDialog } from "./link-dialog";
@@ -19,7 +19,7 @@ type Props = {
   projectId: string;
   first: FootingList;
   firstFilter: FootingFilter;
-  choices: Choices;
+  choices: FootingChoices;
   may: { write: boolean; link: boolean; check: boolean };
 };
 

@@ -3,15 +3,14 @@
 import { type FormEvent, useEffect, useState } from "react";
 import { Notice } from "@/components/account/notice";
 import { suggestions as readSuggestions, useFootingChange } from "@/lib/client/use-footings";
-import type { LinkSuggestion } from "@/lib/contracts/footings";
+import type { FootingChoices, LinkSuggestion } from "@/lib/contracts/footings";
 import { Dialog } from "./dialog";
-import type { Choices } from "./filter-bar";
 import { whole } from "./shown";
 
 type Props = {
   projectId: string;
   footingIds: readonly string[];
-  values: Choices["values"];
+  values: FootingChoices["values"];
   onDone: (sentence: string) => void;
   onClose: () => void;
 };

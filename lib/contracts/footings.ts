@@ -230,6 +230,14 @@ export type AcceptFootingImportInput = z.input<typeof acceptFootingImportInput>;
 export type PreviewLoadImportInput = z.input<typeof previewLoadImportInput>;
 export type AcceptLoadImportInput = z.input<typeof acceptLoadImportInput>;
 
+/** What footings can be narrowed to, owned by and linked to. */
+export type FootingChoices = {
+  zones: { id: string; name: string }[];
+  groundUnits: { id: string; code: string; name: string }[];
+  owners: { id: string; name: string }[];
+  values: { id: string; reference: string; label: string }[];
+};
+
 export type Named = { id: PersonId; name: string };
 
 /** The value that a footing is linked to, with its revision in force. */
