@@ -8,6 +8,7 @@ import { useValue } from "@/lib/client/use-values";
 import type { DraftChoices, ValueDetail } from "@/lib/contracts/values";
 import { ConditionsList } from "./conditions-list";
 import { DraftEditor } from "./draft-editor";
+import { DraftReading } from "./draft-reading";
 import { LivePreview } from "./live-preview";
 import { RevisionHistory } from "./revision-history";
 import { CheckAction, RevisionActions, type Rights } from "./sign-actions";
@@ -26,7 +27,9 @@ export function ValueSheet({ projectId, initial, rights, documents }: Props) {
   const value = data ?? initial;
   const current = value.revisions.find(({ id }) => id === value.currentRevisionId);
   const { draft, footings } = value;
-  const writes = rights.draft && draft !== null;
+  const [takesOver, setTakesOver] = useState(false);
+  // Whoever writes in a draft cannot check it: another's draft opens for reading until one says otherwise.
+  const writes = rights.draft && draft !== null && (draft.preparedBy.id === rights.personId || takesOver);
   const total = footings.notPoured + footings.poured;
   return (
     <>
@@ -58,9 +61,18 @@ export function ValueSheet({ projectId, initial, rights, documents }: Props) {
         <p className="mt-3">No revision is in force: no footing can be checked against this value.</p>
       )}
       {writes && draft ? (
-        <DraftEditor key={draft.preparedBy.id} {...{ projectId, draft, documents }} valueId={value.id} />
+        <DraftEditor {...{ projectId, draft, documents }} valueId={value.id} />
       ) : (
         <StartDraft projectId={projectId} value={value} rights={rights} />
+      )}
+      {draft && !writes && <DraftReading draft={draft} />}
+      {draft && !writes && rights.draft && (
+        <p className="mt-3">
+          <button type="button" className="border border-rule px-3 py-1.5" onClick={() => setTakesOver(true)}>
+            Write in this draft
+          </button>{" "}
+          <span className="text-sm text-ink-2">You can then no longer be the one who checks it.</span>
+        </p>
       )}
       {draft && <CheckAction {...{ projectId, value, rights, draft }} />}
       {!writes && total > 0 && current && (
@@ -81,8 +93,7 @@ function StartDraft({ projectId, value, rights }: { projectId: string; value: Va
   const queries = useQueryClient();
   const [busy, setBusy] = useState(false);
   const [refused, setRefused] = useState<Refused>();
-  if (value.draft)
-    return <p className="mt-6 text-ink-2">A draft is being written by {value.draft.preparedBy.name}.</p>;
+  if (value.draft) return null;
   if (!rights.draft)
     return <p className="mt-6 text-ink-2">A geotechnical engineer writes the next revision.</p>;
   const start = async () => {
