@@ -3,7 +3,6 @@ import { ACTION, INK, INK_2, SMALL_PX } from "./ink";
 import { DEPTH_PX, edgeProfile, type PressureGiven } from "./pressure-layout";
 import { boxPath, SoilArea } from "./soil-hatch";
 import { spread } from "./spread";
-import { textWidth } from "./text-width";
 
 /** Height of the highest pressure in the drawing. */
 const BLOCK_PX = 84;
@@ -25,7 +24,7 @@ export const drawnDepth_px = (given: PressureGiven, pxPerM: number): number =>
   Math.min(Math.max(0, given.groundLevel_m - given.foundingLevel_m) * pxPerM, DEPTH_PX);
 
 /** Height in pixels below the founding level that the pressure block and its figures take. */
-export const BLOCK_ROOM_PX = BLOCK_PX + 44;
+export const BLOCK_ROOM_PX = BLOCK_PX + 48;
 
 /** The pad seen along L: ground, pad and column, the load at its eccentricity, levels, and the pressure block under it. */
 export function PressureElevation({
@@ -217,9 +216,8 @@ function Block(props: {
         <HorizontalDimension
           x1={left}
           x2={right}
-          y={start + BLOCK_PX + 26}
+          y={start + BLOCK_PX + 32}
           text={`in contact over ${(profile.to_m - profile.from_m).toFixed(2)} m`}
-          textAt={{ x: (left + right) / 2, anchor: "middle" }}
         />
       ) : null}
     </g>
@@ -269,7 +267,7 @@ function Levels(props: {
                 fill="none"
               />
             ) : null}
-            <LevelTriangle x={x - 8} y={y} filled={filled} />
+            <LevelTriangle x={filled ? x - 26 : x - 8} y={y} filled={filled} />
             <path
               d={`M${round(x)} ${round(y)}h6L${round(x + 16)} ${round(textY - 4)}h4`}
               stroke={INK_2}
@@ -285,7 +283,3 @@ function Levels(props: {
     </g>
   );
 }
-
-/** Room that the levels' lettering takes to the right of the ground. */
-export const levelsRoom_px = (given: PressureGiven): number =>
-  24 + textWidth(`founding ${given.foundingLevel_m.toFixed(3)}`, SMALL_PX);

@@ -1,5 +1,5 @@
 import { HorizontalDimension, Label, pathOf, round, VerticalDimension } from "./drawing-marks";
-import { ACTION, INK, INK_2, SHEET, SMALL_PX } from "./ink";
+import { ACTION, INK, INK_2, SHEET, SMALL_PX, TEXT_PX } from "./ink";
 import { type BasePoint, contactLimit, type PressureGiven } from "./pressure-layout";
 import { textWidth } from "./text-width";
 
@@ -37,6 +37,7 @@ export function PressurePlan({ given, centreX, centreY, pxPerM, contactFill }: P
   ];
   const pressures = corners.map((_, index) => `${Math.round(cornerPressures_kPa[index] ?? 0)} kPa`);
   const widest = Math.max(...pressures.map((text) => textWidth(text, SMALL_PX)));
+  const breadthText = `B = ${metres(breadth_m)}`;
   const resultant = resultantPlace(given, halfB, halfL, pxPerM);
   const [rx, ry] = [centreX + resultant.x, centreY + resultant.y];
   const column = given.column ?? { breadth_m: breadth_m / 4, length_m: length_m / 4 };
@@ -130,7 +131,10 @@ export function PressurePlan({ given, centreX, centreY, pxPerM, contactFill }: P
         x2={right}
         y={bottom + 40}
         from={bottom + 20}
-        text={`B = ${metres(breadth_m)}`}
+        text={breadthText}
+        textAt={
+          textWidth(breadthText, TEXT_PX) + 8 > 2 * halfB ? { x: right + 18, anchor: "start" } : undefined
+        }
       />
       <VerticalDimension
         y1={top}
@@ -147,7 +151,7 @@ export function PressurePlan({ given, centreX, centreY, pxPerM, contactFill }: P
           y={top - 30}
           from={top - 12}
           text={<EccentricityText axis="B" value_m={eccentricityB_m} />}
-          textAt={{ x: Math.max(centreX, rx) + 14, anchor: "start" }}
+          textAt={{ x: Math.max(centreX, rx) + 20, anchor: "start" }}
         />
       )}
       {none || Math.abs(eccentricityL_m) < 5e-4 ? null : (

@@ -74,12 +74,14 @@ export function Sign({
   size = "normal",
 }: MarkProps & { word?: string; hideWord?: boolean; size?: Size }) {
   const { sign_px, words } = SIZES[size];
+  // The triangle is drawn larger: a number has to be read in it.
+  const drawn_px = name === "affected" ? Math.round(sign_px * 1.25) : sign_px;
   return (
     <span data-sign={name} className="inline-flex items-center gap-1.5 align-middle whitespace-nowrap">
       {name === "withdrawn" && !hideWord ? null : (
         <svg
-          width={sign_px}
-          height={sign_px}
+          width={drawn_px}
+          height={drawn_px}
           viewBox="0 0 20 20"
           className="shrink-0"
           role={hideWord ? "img" : undefined}

@@ -37,8 +37,8 @@ export const SOILS = {
     word: "topsoil",
     tint: "#5E4B36",
     opacity: 0.3,
-    tile: [14, 12],
-    marks: line("M1 9H9M3 9V4M5 9V2.5M7 9V4M11 3V0M12.5 3V0"),
+    tile: [16, 20],
+    marks: line("M1.5 8V4M4.5 8V1.5M7.5 8V4M9 18V14M12 18V11.5M15 18V14"),
   },
   clay: {
     word: "clay",

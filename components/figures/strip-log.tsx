@@ -152,18 +152,18 @@ function Foot({ hole, layout }: { hole: StripHole; layout: StripLayout }) {
   const bottom = round(layout.bottom);
   return (
     <g>
-      <path d={`M${COLUMNS.level - 8} ${bottom}H${COLUMNS.lead}`} stroke={INK} strokeWidth={2} />
+      <path d={`M${COLUMNS.hatch - 5} ${bottom}H${COLUMNS.lead}`} stroke={INK} strokeWidth={2} />
       {finalDepth_m === null ? (
-        <Label x={COLUMNS.depth} y={layout.bottom + 17} size_px={SMALL_PX}>
+        <Label x={COLUMNS.depth} y={layout.bottom + 19} size_px={SMALL_PX}>
           final depth not given
         </Label>
       ) : (
         <>
-          <Label x={COLUMNS.depth} y={layout.bottom + 17} size_px={SMALL_PX} weight="medium">
+          <Label x={COLUMNS.depth} y={layout.bottom + 19} size_px={SMALL_PX} weight="medium">
             {`final depth ${finalDepth_m.toFixed(2)} m`}
           </Label>
           {groundLevel_m === null ? null : (
-            <Label x={COLUMNS.depth} y={layout.bottom + 31} size_px={SMALL_PX}>
+            <Label x={COLUMNS.depth} y={layout.bottom + 33} size_px={SMALL_PX}>
               {`level ${signed(groundLevel_m - finalDepth_m, 2)} m`}
             </Label>
           )}

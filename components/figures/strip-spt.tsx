@@ -43,6 +43,11 @@ export function StripSpts({ spts, layout }: { spts: readonly StripSpt[]; layout:
           </Label>
         </g>
       ))}
+      {spts.length === 0 ? (
+        <Label x={right + 12} y={HEAD_PX + 17} size_px={SMALL_PX} colour={INK_2}>
+          none recorded
+        </Label>
+      ) : null}
       {inOrder.map((spt, index) => {
         const y = layout.y(spt.depth_m);
         const textY = (places[index] ?? 0) + 6;

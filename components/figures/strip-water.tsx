@@ -1,4 +1,4 @@
-import { ArrowHead, LevelTriangle, Lines, round } from "./drawing-marks";
+import { ArrowHead, Label, LevelTriangle, Lines, round } from "./drawing-marks";
 import { ACTION, INK_2, SMALL_PX } from "./ink";
 import { spread } from "./spread";
 import { COLUMNS, HEAD_PX, type StripLayout, type StripStrike } from "./strip-layout";
@@ -49,6 +49,11 @@ export function StripWater({ strikes, layout }: { strikes: readonly StripStrike[
   );
   return (
     <g>
+      {strikes.length === 0 ? (
+        <Label x={COLUMNS.water + 6} y={HEAD_PX + 17} size_px={SMALL_PX} colour={INK_2}>
+          none recorded
+        </Label>
+      ) : null}
       {drawn.map(({ strike, x, risen }) => {
         const struckY = strike.depth_m === null ? null : layout.y(strike.depth_m);
         const risenY = risen && risen.depth_m !== null ? layout.y(risen.depth_m) : null;
