@@ -107,7 +107,8 @@ function checkCodes({ groups, findings, concatenator }: RuleContext): void {
         const text = cells[column] ?? "";
         if (text === "" || seen.has(text)) continue;
         seen.add(text);
-        for (const code of concatenator === "" ? [text] : text.split(concatenator)) {
+        for (const part of concatenator === "" ? [text] : text.split(concatenator)) {
+          const code = part.trim();
           if (code === "" || (code !== text && seen.has(code)) || listed.has(`${name}\u0001${code}`))
             continue;
           seen.add(code);

@@ -25,6 +25,8 @@ const replacements: ReadonlyMap<string, string> = new Map([
   ["’", "'"],
   ["“", '"'],
   ["”", '"'],
+  ["′", "'"],
+  ["″", '"'],
   ["«", '"'],
   ["»", '"'],
   ["…", "..."],

@@ -188,7 +188,8 @@ function usedCodes(groups: readonly WrittenGroup[], given: AgsExport): string[][
     for (const [column, { name, type }] of headings.entries()) {
       if (type !== "PA") continue;
       for (const items of rows) {
-        for (const code of (items[column] ?? "").split(concatenator)) {
+        for (const part of (items[column] ?? "").split(concatenator)) {
+          const code = part.trim();
           const key = `${name}\u0001${code}`;
           if (code !== "" && !used.has(key))
             used.set(key, [name, code, told.get(key) ?? codeLabel(name, code)]);
