@@ -8,7 +8,13 @@ import {
   peakPressurePartial,
   peakPressureTwoAxes,
 } from "./formulas";
-import { KERN_TOLERANCE, type PressurePlane, pressurePlane } from "./solve";
+import {
+  type ContactCorner,
+  contactCorners,
+  KERN_TOLERANCE,
+  type PressurePlane,
+  pressurePlane,
+} from "./solve";
 
 export const distributions = ["uniform", "trapezoidal", "triangular", "partial", "none"] as const;
 export type Distribution = (typeof distributions)[number];
@@ -53,7 +59,10 @@ const noPressure = (eB: number | null, eL: number | null, kern: number | null): 
   contactRatio: 0,
 });
 
-/** Pressure under the base for one load; the plane is null without equilibrium. The form that checks use in bulk. */
+/** A share of nothing has no size: what overflows is not given out as a figure. */
+const finiteOrNull = (figure: number): number | null => (Number.isFinite(figure) ? figure : null);
+
+/** Pressure under the base for one load; figures are null without equilibrium. The form that checks use in bulk. */
 export function solveBase(load: BaseLoad): BasePressure {
   const { breadth_m, length_m, vertical_kN, momentB_kNm, momentL_kNm } = load;
   if (!(vertical_kN > 0)) return noPressure(null, null, null);
@@ -62,13 +71,23 @@ export function solveBase(load: BaseLoad): BasePressure {
   const xi = Math.abs(eB) / breadth_m;
   const eta = Math.abs(eL) / length_m;
   const kern = 6 * xi + 6 * eta;
-  if (!(xi < 0.5 && eta < 0.5)) return noPressure(eB, eL, kern);
+  if (!(xi < 0.5 && eta < 0.5)) return noPressure(finiteOrNull(eB), finiteOrNull(eL), finiteOrNull(kern));
   const plane = pressurePlane(xi, eta);
   if (!(plane.residual <= RESIDUAL_LIMIT)) return noPressure(eB, eL, kern);
+  const { peak, slopeB, slopeL } = plane;
   const mean_kPa = vertical_kN / (breadth_m * length_m);
-  const b = eB < 0 ? -plane.b : plane.b;
-  const c = eL < 0 ? -plane.c : plane.c;
-  const maxPressure_kPa = mean_kPa * plane.peak;
+  const loaded_kPa = mean_kPa * peak;
+  const acrossB_kPa = mean_kPa * Math.max(0, peak - slopeB);
+  const acrossL_kPa = mean_kPa * Math.max(0, peak - slopeL);
+  const far_kPa = mean_kPa * Math.max(0, peak - slopeB - slopeL);
+  const corners: BasePressure["cornerPressures_kPa"] =
+    eL < 0
+      ? eB < 0
+        ? [far_kPa, acrossL_kPa, loaded_kPa, acrossB_kPa]
+        : [acrossL_kPa, far_kPa, acrossB_kPa, loaded_kPa]
+      : eB < 0
+        ? [acrossB_kPa, loaded_kPa, acrossL_kPa, far_kPa]
+        : [loaded_kPa, acrossB_kPa, far_kPa, acrossL_kPa];
   return {
     equilibrium: true,
     distribution: distributionOf(plane, eB, eL, kern),
@@ -76,14 +95,9 @@ export function solveBase(load: BaseLoad): BasePressure {
     eccentricityL_m: eL,
     kernSum: kern,
     withinMiddleThird: kern <= 1 + KERN_TOLERANCE,
-    maxPressure_kPa,
-    minPressure_kPa: mean_kPa * plane.least,
-    cornerPressures_kPa: [
-      mean_kPa * Math.max(0, plane.a + b / 2 + c / 2),
-      mean_kPa * Math.max(0, plane.a - b / 2 + c / 2),
-      mean_kPa * Math.max(0, plane.a - b / 2 - c / 2),
-      mean_kPa * Math.max(0, plane.a + b / 2 - c / 2),
-    ],
+    maxPressure_kPa: loaded_kPa,
+    minPressure_kPa: plane.zone === "full" ? far_kPa : 0,
+    cornerPressures_kPa: corners,
     contactRatio: plane.contactRatio,
   };
 }
@@ -95,51 +109,30 @@ function distributionOf(plane: PressurePlane, eB: number, eL: number, kern: numb
   return plane.zone === "full" ? "trapezoidal" : "partial";
 }
 
-/** A corner that the line passes through belongs to it, whatever the last digits say. */
-const nearZero = (value: number, peak: number): number => (Math.abs(value) <= 1e-12 * peak ? 0 : value);
+type Point = [alongB_m: number, alongL_m: number];
 
 /** The contact area as points from the centre of the base, anticlockwise, and the line where the pressure ends. */
 export function contactOutline(load: BaseLoad): {
-  contactPolygon_m: [number, number][];
-  neutralAxis: { from_m: [number, number]; to_m: [number, number] } | null;
+  contactPolygon_m: Point[];
+  neutralAxis: { from_m: Point; to_m: Point } | null;
 } {
   const { breadth_m, length_m, vertical_kN, momentB_kNm, momentL_kNm } = load;
-  const solved = solveBase(load);
-  if (!solved.equilibrium) return { contactPolygon_m: [], neutralAxis: null };
+  if (!solveBase(load).equilibrium) return { contactPolygon_m: [], neutralAxis: null };
   const eB = momentB_kNm / vertical_kN;
   const eL = momentL_kNm / vertical_kN;
-  const plane = pressurePlane(Math.abs(eB) / breadth_m, Math.abs(eL) / length_m);
-  const b = eB < 0 ? -plane.b : plane.b;
-  const c = eL < 0 ? -plane.c : plane.c;
-  const corners: [number, number][] = [
-    [0.5, 0.5],
-    [-0.5, 0.5],
-    [-0.5, -0.5],
-    [0.5, -0.5],
+  const signB = eB < 0 ? -1 : 1;
+  const signL = eL < 0 ? -1 : 1;
+  const { corners, ends } = contactCorners(pressurePlane(Math.abs(eB) / breadth_m, Math.abs(eL) / length_m));
+  const place = ([x, y]: ContactCorner): Point => [
+    signB * (0.5 - x) * breadth_m,
+    signL * (0.5 - y) * length_m,
   ];
-  if (plane.zone === "full")
-    return { contactPolygon_m: corners.map(([u, v]) => [u * breadth_m, v * length_m]), neutralAxis: null };
-  const outline: [number, number][] = [];
-  const crossings: [number, number][] = [];
-  for (let at = 0; at < 4; at += 1) {
-    const [u0, v0] = corners[at] as [number, number];
-    const [u1, v1] = corners[(at + 1) % 4] as [number, number];
-    const s0 = nearZero(plane.a + b * u0 + c * v0, plane.peak);
-    const s1 = nearZero(plane.a + b * u1 + c * v1, plane.peak);
-    if (s0 >= 0) outline.push([u0 * breadth_m, v0 * length_m]);
-    if (s0 === 0) crossings.push([u0 * breadth_m, v0 * length_m]);
-    if (s0 > 0 !== s1 > 0 && s0 !== 0 && s1 !== 0) {
-      const share = s0 / (s0 - s1);
-      const point: [number, number] = [
-        (u0 + share * (u1 - u0)) * breadth_m,
-        (v0 + share * (v1 - v0)) * length_m,
-      ];
-      outline.push(point);
-      crossings.push(point);
-    }
-  }
-  const [from_m, to_m] = crossings;
-  return { contactPolygon_m: outline, neutralAxis: from_m && to_m ? { from_m, to_m } : null };
+  const contactPolygon_m = corners.map(place);
+  if (signB !== signL) contactPolygon_m.reverse();
+  return {
+    contactPolygon_m,
+    neutralAxis: ends === null ? null : { from_m: place(ends[0]), to_m: place(ends[1]) },
+  };
 }
 
 const inputs = z.strictObject({
