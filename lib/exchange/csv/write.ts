@@ -8,12 +8,13 @@ export interface CsvWriting {
   readonly byteOrderMark?: boolean;
 }
 
-const formulaStart = /^[=+\-@\t\r\n\uff1d\uff0b\uff0d\uff20]/;
+const formulaStart = /^\s*[=+\-@\uff1d\uff0b\uff0d\uff20]|^[\t\r\n]/u;
 const numeric = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
 
 /**
- * Writes rows as CSV with CR LF. A text that a spreadsheet would run as a formula (=, +, -, @, tab or a line break at
- * its start) gets an apostrophe before it, unless it is a plain number. Numbers that are not finite are refused.
+ * Writes rows as CSV with CR LF. A text that a spreadsheet would run as a formula (=, +, - or @ at its start, behind
+ * blanks or not, or a tab or line break) gets an apostrophe before it, unless it is a plain number. Throws a
+ * RangeError for a number that is not finite.
  */
 export function writeCsv(rows: Iterable<readonly CsvCell[]>, options: CsvWriting = {}): string {
   const { delimiter = ",", byteOrderMark = false } = options;
@@ -24,7 +25,7 @@ export function writeCsv(rows: Iterable<readonly CsvCell[]>, options: CsvWriting
 
 /** A text as it may stand in a cell of a spreadsheet: never run as a formula. */
 export function neutralised(text: string): string {
-  return formulaStart.test(text) && !numeric.test(text) ? `'${text}` : text;
+  return formulaStart.test(text) && !numeric.test(text.trim()) ? `'${text}` : text;
 }
 
 function writeCell(cell: CsvCell, delimiter: string): string {
