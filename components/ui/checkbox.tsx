@@ -9,7 +9,17 @@ type Props = Pick<FieldProps, "label" | "hint" | "error" | "className" | "hideLa
 } & Omit<ComponentProps<"input">, keyof FieldProps | "type" | "children">;
 
 /** A box to tick with its words behind it. */
-export function Checkbox({ label, hint, error, className, hideLabel, partly = false, id, ...input }: Props) {
+export function Checkbox({
+  label,
+  hint,
+  error,
+  className,
+  hideLabel,
+  partly = false,
+  id,
+  ref,
+  ...input
+}: Props) {
   const own = useId();
   const control = id ?? own;
   const hintId = `${control}-hint`;
@@ -26,6 +36,8 @@ export function Checkbox({ label, hint, error, className, hideLabel, partly = fa
           aria-invalid={error ? true : undefined}
           ref={(box) => {
             if (box) box.indeterminate = partly;
+            if (typeof ref === "function") return ref(box);
+            if (ref) ref.current = box;
           }}
           className="mt-0.5 size-4 shrink-0"
         />

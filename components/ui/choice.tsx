@@ -34,23 +34,24 @@ export function Choice<Value extends string>({
   inline = false,
 }: Props<Value>) {
   const id = useId();
+  const labelId = `${id}-label`;
   const hintId = `${id}-hint`;
   const errorId = `${id}-error`;
   const described = [error ? errorId : "", hint ? hintId : ""].filter(Boolean).join(" ");
   return (
-    <fieldset
+    <div
       role="radiogroup"
+      aria-labelledby={labelId}
       aria-describedby={described || undefined}
       aria-invalid={error ? true : undefined}
       aria-required={optional ? undefined : true}
-      disabled={disabled}
       className={className}
     >
-      <legend className="mb-1">
+      <div id={labelId} className="mb-1">
         {label}
         {unit && <span className="text-ink-2"> ({unit})</span>}
         {optional && <span className="text-ink-2"> · optional</span>}
-      </legend>
+      </div>
       <div className={inline ? "flex flex-wrap gap-x-5" : ""}>
         {answers.map((answer) => {
           const noteId = `${id}-${answer.value}-note`;
@@ -62,6 +63,7 @@ export function Choice<Value extends string>({
                   name={name ?? id}
                   value={answer.value}
                   checked={value === answer.value}
+                  disabled={disabled}
                   onChange={() => onChange(answer.value)}
                   aria-describedby={answer.hint ? noteId : undefined}
                   className="mt-0.5 size-4 shrink-0"
@@ -78,6 +80,6 @@ export function Choice<Value extends string>({
         })}
       </div>
       <FieldNotes hint={hint} error={error} hintId={hintId} errorId={errorId} />
-    </fieldset>
+    </div>
   );
 }

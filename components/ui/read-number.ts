@@ -6,7 +6,10 @@ export type TypedNumber = { value: number | null } | { problem: string };
  * because 1,250 is twelve hundred and fifty to one reader and one and a quarter to the next.
  */
 export function readNumber(typed: string): TypedNumber {
-  const text = typed.trim().replaceAll("−", "-").replaceAll(" ", " ").replaceAll(" ", " ");
+  const text = typed
+    .trim()
+    .replaceAll("−", "-")
+    .replace(/[\u00a0\u2009\u202f]/g, " ");
   if (text === "") return { value: null };
   if (text.includes(","))
     return { problem: "Write the decimal with a point and large numbers without commas, such as 1250.5." };
