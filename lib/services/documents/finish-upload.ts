@@ -59,7 +59,7 @@ export async function finishUpload(context: Context, given: unknown) {
 
 const bare = (etag: string): string => etag.replace(/^W\/|"/g, "");
 
-async function waitingUpload(context: Context, uploadId: UploadId): Promise<Upload> {
+export async function waitingUpload(context: Context, uploadId: UploadId): Promise<Upload> {
   const [found] = await inProject({ ...context, keyed: undefined }, (tx) =>
     tx
       .select()
@@ -77,7 +77,7 @@ async function waitingUpload(context: Context, uploadId: UploadId): Promise<Uplo
   return found;
 }
 
-async function refuseUpload(context: Context, upload: Upload, refusal: string): Promise<void> {
+export async function refuseUpload(context: Context, upload: Upload, refusal: string): Promise<void> {
   await inProject({ ...context, keyed: undefined }, async (tx) => {
     await tx
       .update(t.upload)
@@ -88,12 +88,14 @@ async function refuseUpload(context: Context, upload: Upload, refusal: string): 
   await remove(upload.objectKey).catch(() => {});
 }
 
-async function record(
+/** Writes one verified file down as a document revision; audits only where it is the whole act. */
+export async function recordFile(
   tx: Transaction,
   context: Context,
   given: Given,
   upload: Upload,
   stored: { objectKey: string; sha256: string },
+  options: { audited: boolean } = { audited: true },
 ) {
   const { projectId } = context;
   if (!given.evenIfHere) await refuseIfHere(tx, context, stored.sha256);
@@ -153,18 +155,20 @@ async function record(
       fromRevisionId: document.currentRevisionId,
       toRevisionId: documentRevisionId,
     });
-  await audit(tx, context, {
-    verb: "document:revise",
-    subject: `document/${document.id}`,
-    detail: {
-      reference: document.reference,
-      code: given.code,
-      status: given.status,
-      fileName: upload.fileName,
-      sha256: stored.sha256,
-      supersedes: document.currentRevisionId,
-    },
-  });
+  // An act that takes a file in along with other things writes one record of the whole.
+  if (options.audited)
+    await audit(tx, context, {
+      verb: "document:revise",
+      subject: `document/${document.id}`,
+      detail: {
+        reference: document.reference,
+        code: given.code,
+        status: given.status,
+        fileName: upload.fileName,
+        sha256: stored.sha256,
+        supersedes: document.currentRevisionId,
+      },
+    });
   return {
     documentId: document.id,
     documentRevisionId,
