@@ -47,7 +47,7 @@ export async function finishUpload(context: Context, given: unknown) {
   }
   try {
     const answer = await inProject(context, (tx) =>
-      record(tx, context, wanted, upload, { objectKey, sha256 }),
+      recordFile(tx, context, wanted, upload, { objectKey, sha256 }),
     );
     await remove(upload.objectKey).catch(() => {});
     return answer;
