@@ -1,11 +1,11 @@
 "use client";
 
 import { defaultRangeExtractor, useVirtualizer } from "@tanstack/react-virtual";
-import { type ReactNode, useCallback, useEffect, useMemo, useRef, useState } from "react";
-import { flushSync } from "react-dom";
+import { type ReactNode, useEffect, useMemo, useRef, useState } from "react";
 import { type Column, HeadCell, SkeletonRows } from "./data-table-parts";
 import { DataRow, Gap } from "./data-table-row";
 import { type Sort, sortRows } from "./sort-rows";
+import { usePrinting } from "./use-printing";
 import { useRowKeys } from "./use-row-keys";
 
 export type { Column } from "./data-table-parts";
@@ -204,21 +204,4 @@ export function DataTable<Row>(props: Props<Row>) {
       </span>
     </div>
   );
-}
-
-/** True while the page is being printed, so that all of it can be in the page. */
-function usePrinting(): boolean {
-  const [printing, setPrinting] = useState(false);
-  const set = useCallback((on: boolean) => flushSync(() => setPrinting(on)), []);
-  useEffect(() => {
-    const begin = () => set(true);
-    const end = () => set(false);
-    window.addEventListener("beforeprint", begin);
-    window.addEventListener("afterprint", end);
-    return () => {
-      window.removeEventListener("beforeprint", begin);
-      window.removeEventListener("afterprint", end);
-    };
-  }, [set]);
-  return printing;
 }
