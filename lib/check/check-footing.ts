@@ -1,17 +1,26 @@
 import { solveBase } from "@/lib/methods/base-pressure/index";
 import { KERN_TOLERANCE } from "@/lib/methods/base-pressure/solve";
+import { effectiveAreaOf } from "@/lib/methods/effective-area/index";
 import { overturningFactors } from "@/lib/methods/overturning/index";
 import { factorOver, slidingApplied, slidingResistance } from "@/lib/methods/sliding/index";
-import { computedAllowable, statedAllowable, waterHead } from "./allowable";
+import { computedAllowable, statedAllowable } from "./allowable";
+import { assertUsable } from "./assert-usable";
+import { collectFailures, collectNotes, collectOutside } from "./findings";
 import {
   backfillWeight,
   baseMoment,
   baseVertical,
   bearingDemand,
   buoyancy,
+  contactArea,
   effectiveOverburden,
+  effectivePressure,
   foundingDepth,
   padWeight,
+  requiredNet,
+  stabilisingLoad,
+  upliftLoad,
+  waterHead,
 } from "./formulas";
 import type {
   CheckedLoad,
@@ -20,6 +29,7 @@ import type {
   Finding,
   FootingCheckInput,
   FootingCheckResult,
+  Requirement,
 } from "./input";
 
 /** The same for every combination of one footing: weights, water, overburden. */
@@ -35,12 +45,13 @@ type Fixed = {
 
 /**
  * One footing, its combinations, one value, the criteria (definitions: DEVELOPERS.md, "The check"). Pure and
- * deterministic. Comparisons are made on unrounded figures; a figure that has no bound is null and never passes.
- * The input must have come through `footingCheckInput` or the register, whose columns hold the same limits.
+ * deterministic. Comparisons are made on unrounded figures; a figure that has no bound is null and never passes. The
+ * input has come through `footingCheckInput` or the register, whose columns hold the same limits; a figure that is none
+ * all the same is refused by an `UnusableInput`, never checked.
  */
 export function checkFooting(input: FootingCheckInput): FootingCheckResult {
-  const { footing, loads, value, criteria } = input;
-  const findings: Finding[] = [];
+  assertUsable(input);
+  const { footing, loads, value } = input;
   const { breadth_m, length_m } = footing;
   const depth_m = foundingDepth.of(footing);
   const waterHead_m = waterHead(value.groundwaterLevel_m, footing.foundingLevel_m);
@@ -48,7 +59,13 @@ export function checkFooting(input: FootingCheckInput): FootingCheckResult {
   const fixed: Fixed = {
     depth_m,
     padWeight_kN: padWeight.of(footing),
-    backfillWeight_kN: backfillWeight.of({ ...footing, depth_m }),
+    backfillWeight_kN: backfillWeight.of({
+      breadth_m,
+      length_m,
+      depth_m,
+      thickness_m: footing.thickness_m,
+      backfillUnitWeight_kNm3: footing.backfillUnitWeight_kNm3,
+    }),
     waterHead_m,
     buoyancy_kN: buoyancy.of({ waterHead_m, breadth_m, length_m }),
     overburden_kPa: effectiveOverburden.of({
@@ -58,6 +75,7 @@ export function checkFooting(input: FootingCheckInput): FootingCheckResult {
     }),
     stated_kPa: stated.netAllowable_kPa,
   };
+  const findings: Finding[] = [];
   collectOutside(input, depth_m, stated.outside, findings);
   const outside = findings.length > 0;
 
@@ -65,7 +83,7 @@ export function checkFooting(input: FootingCheckInput): FootingCheckResult {
   let governing = 0;
   let worst = -1;
   let bearing: number | null = 0;
-  let required: number | null = 0;
+  let required: number | null = Number.NEGATIVE_INFINITY;
   let maxPressure_kPa: number | null = 0;
   let minContactRatio = 1;
   let factorSliding: number | null = null;
@@ -87,12 +105,14 @@ export function checkFooting(input: FootingCheckInput): FootingCheckResult {
     factorSliding = smaller(factorSliding, result.factorSliding);
     factorOverturning = smaller(factorOverturning, result.factorOverturning);
     factorUplift = smaller(factorUplift, result.factorUplift);
-    collectFailures(result, criteria, findings);
+    collectFailures(result, input, findings);
   }
+  collectNotes(input, fixed, findings);
   const utilisation = Number.isFinite(worst) ? worst : null;
   return {
     verdict: verdictOf(outside, utilisation),
     governingCombination: loads[governing]?.name ?? "",
+    governedBy: combinations[governing]?.governedBy ?? "bearing",
     utilisation,
     utilisationBearing: bearing,
     requiredNet_kPa: required,
@@ -148,32 +168,55 @@ function combine(load: CheckedLoad, input: FootingCheckInput, fixed: Fixed): Com
     loadHeight_m,
   });
   const base = solveBase({ breadth_m, length_m, vertical_kN: baseVertical_kN, momentB_kNm, momentL_kNm });
-  const effectiveBreadth_m = base.equilibrium ? breadth_m - 2 * Math.abs(base.eccentricityB_m as number) : 0;
-  const effectiveLength_m = base.equilibrium ? length_m - 2 * Math.abs(base.eccentricityL_m as number) : 0;
-  const effectivePressure_kPa = base.equilibrium
-    ? baseVertical_kN / (effectiveBreadth_m * effectiveLength_m)
-    : null;
+  const { effectiveBreadth_m, effectiveLength_m, effectiveArea_m2 } = base.equilibrium
+    ? effectiveAreaOf({
+        breadth_m,
+        length_m,
+        eccentricityB_m: base.eccentricityB_m ?? 0,
+        eccentricityL_m: base.eccentricityL_m ?? 0,
+      })
+    : { effectiveBreadth_m: 0, effectiveLength_m: 0, effectiveArea_m2: 0 };
+  const effectivePressure_kPa =
+    effectiveArea_m2 > 0
+      ? effectivePressure.of({ vertical_kN: baseVertical_kN, effectiveBreadth_m, effectiveLength_m })
+      : null;
 
   const pressure_kPa = value.comparedWith === "maximum" ? base.maxPressure_kPa : effectivePressure_kPa;
   const demandNet_kPa = pressure_kPa === null ? null : bearingDemand.of({ pressure_kPa, overburden_kPa });
   const durationFactor = load.duration === "permanent" ? 1 : value.durationFactors[load.duration];
-  const netAllowable_kPa =
-    value.kind === "parameters"
-      ? computedAllowable(value.parameters, footing, value, {
-          effectiveBreadth_m,
-          effectiveLength_m,
-          vertical_kN: baseVertical_kN,
-          horizontalB_kN: load.horizontalB_kN,
-          horizontalL_kN: load.horizontalL_kN,
-          depth_m: fixed.depth_m,
-          overburden_kPa,
-        })
-      : fixed.stated_kPa;
-  const capacityNet_kPa = netAllowable_kPa === null ? null : netAllowable_kPa * durationFactor;
+  const requiredNet_kPa = demandNet_kPa === null ? null : requiredNet.of({ demandNet_kPa, durationFactor });
+  let netAllowable_kPa = fixed.stated_kPa;
+  let ultimate_kPa: number | null = null;
+  let settlementCap_kPa: number | null = null;
+  if (value.kind === "parameters") {
+    settlementCap_kPa = value.parameters.settlementCap_kPa;
+    const computed = computedAllowable(value, footing, {
+      effectiveBreadth_m,
+      effectiveLength_m,
+      vertical_kN: baseVertical_kN,
+      horizontalB_kN: load.horizontalB_kN,
+      horizontalL_kN: load.horizontalL_kN,
+      depth_m: fixed.depth_m,
+      overburden_kPa,
+    });
+    netAllowable_kPa = computed?.netAllowable_kPa ?? null;
+    ultimate_kPa = computed?.ultimate_kPa ?? null;
+  }
+  // What settlement allows is not raised for a short load.
+  const strength_kPa = netAllowable_kPa === null ? null : netAllowable_kPa * durationFactor;
+  const capacityNet_kPa =
+    strength_kPa === null || settlementCap_kPa === null
+      ? strength_kPa
+      : Math.min(strength_kPa, settlementCap_kPa);
+  // The required value over the stated one, so that a stored required value and a check never disagree by rounding.
   const utilisationBearing =
-    demandNet_kPa === null || capacityNet_kPa === null ? null : share(demandNet_kPa, capacityNet_kPa);
+    demandNet_kPa === null || requiredNet_kPa === null || netAllowable_kPa === null
+      ? null
+      : settlementCap_kPa === null
+        ? share(requiredNet_kPa, netAllowable_kPa)
+        : larger(share(requiredNet_kPa, netAllowable_kPa), share(demandNet_kPa, settlementCap_kPa));
 
-  const contactArea_m2 = base.contactRatio * breadth_m * length_m;
+  const contactArea_m2 = contactArea.of({ contactRatio: base.contactRatio, breadth_m, length_m });
   const slidingResistance_kN = slidingResistance.of({
     vertical_kN: Math.max(0, baseVertical_kN),
     interfaceAngle_deg: criteria.interfaceAngle_deg,
@@ -182,26 +225,42 @@ function combine(load: CheckedLoad, input: FootingCheckInput, fixed: Fixed): Com
     passive_kN: 0,
   });
   const slidingApplied_kN = slidingApplied.of(load);
-  const { factorOfSafety: factorOverturning } = overturningFactors({
+  const { factorOfSafetyB, factorOfSafetyL, factorOfSafety } = overturningFactors({
     breadth_m,
     length_m,
     vertical_kN: Math.max(0, baseVertical_kN),
     momentB_kNm,
     momentL_kNm,
   });
-  const stabilising_kN = Math.max(0, load.vertical_kN) + padWeight_kN + backfillWeight_kN;
-  const uplift_kN = buoyancy_kN + Math.max(0, -load.vertical_kN);
-  const utilisationContact = contactUtilisation(
-    load,
-    base.kernSum,
-    base.contactRatio,
-    base.equilibrium,
-    criteria,
-  );
+  const { vertical_kN } = load;
+  const stabilising_kN = stabilisingLoad.of({ vertical_kN, padWeight_kN, backfillWeight_kN });
+  const uplift_kN = upliftLoad.of({ buoyancy_kN, vertical_kN });
+  const utilisationContact = base.equilibrium
+    ? contactUtilisation(load, base.kernSum ?? Number.NaN, base.contactRatio, criteria)
+    : null;
   const utilisationSliding = share(slidingApplied_kN * criteria.slidingFactor, slidingResistance_kN);
   const utilisationOverturning =
-    factorOverturning === null ? 0 : share(criteria.overturningFactor, factorOverturning);
+    factorOfSafety === null ? 0 : share(criteria.overturningFactor, factorOfSafety);
   const utilisationUplift = share(uplift_kN * criteria.upliftFactor, stabilising_kN);
+
+  let utilisation = utilisationBearing;
+  let governedBy: Requirement = base.equilibrium ? "bearing" : "equilibrium";
+  if (exceeds(utilisationContact, utilisation)) {
+    utilisation = utilisationContact;
+    governedBy = load.duration === "permanent" ? "middle third" : "contact";
+  }
+  if (exceeds(utilisationSliding, utilisation)) {
+    utilisation = utilisationSliding;
+    governedBy = "sliding";
+  }
+  if (exceeds(utilisationOverturning, utilisation)) {
+    utilisation = utilisationOverturning;
+    governedBy = "overturning";
+  }
+  if (exceeds(utilisationUplift, utilisation)) {
+    utilisation = utilisationUplift;
+    governedBy = "uplift";
+  }
   return {
     name: load.name,
     duration: load.duration,
@@ -218,43 +277,46 @@ function combine(load: CheckedLoad, input: FootingCheckInput, fixed: Fixed): Com
     minPressure_kPa: base.minPressure_kPa,
     cornerPressures_kPa: base.cornerPressures_kPa,
     contactRatio: base.contactRatio,
+    contactArea_m2,
     effectiveBreadth_m,
     effectiveLength_m,
     effectivePressure_kPa,
     demandNet_kPa,
     durationFactor,
+    ultimate_kPa,
     netAllowable_kPa,
     capacityNet_kPa,
-    requiredNet_kPa: demandNet_kPa === null ? null : Math.max(0, demandNet_kPa / durationFactor),
+    requiredNet_kPa,
     utilisationBearing,
     utilisationContact,
     slidingResistance_kN,
     slidingApplied_kN,
     factorSliding: factorOver(slidingResistance_kN, slidingApplied_kN),
     utilisationSliding,
-    factorOverturning,
+    factorOverturningB: factorOfSafetyB,
+    factorOverturningL: factorOfSafetyL,
+    factorOverturning: factorOfSafety,
     utilisationOverturning,
+    stabilising_kN,
+    uplift_kN,
     factorUplift: factorOver(stabilising_kN, uplift_kN),
     utilisationUplift,
-    utilisation: larger(
-      larger(
-        larger(utilisationBearing, utilisationContact),
-        larger(utilisationSliding, utilisationOverturning),
-      ),
-      utilisationUplift,
-    ),
+    utilisation,
+    governedBy,
   };
 }
+
+/** Whether one utilisation governs over another: none at all is worse than any number. */
+const exceeds = (one: number | null, other: number | null): boolean =>
+  other !== null && (one === null || !(one <= other));
 
 /** Eccentricity against the limit for the combination's duration: middle third for permanent, contact for the rest. */
 function contactUtilisation(
   load: CheckedLoad,
-  kernSum: number | null,
+  kernSum: number,
   contactRatio: number,
-  equilibrium: boolean,
   criteria: FootingCheckInput["criteria"],
 ): number | null {
-  if (!equilibrium || kernSum === null) return null;
   if (load.duration === "permanent") {
     if (!criteria.permanentWithinMiddleThird) return 0;
     // On the edge of the middle third to the last digit is inside it.
@@ -263,92 +325,4 @@ function contactUtilisation(
   const least =
     load.duration === "transient" ? criteria.transientMinContactRatio : criteria.accidentalMinContactRatio;
   return share(least, contactRatio);
-}
-
-function collectOutside(
-  { footing, value }: FootingCheckInput,
-  depth_m: number,
-  tableLimit: string | null,
-  findings: Finding[],
-): void {
-  const add = (code: string, message: string) =>
-    findings.push({ code, severity: "outside", message, combination: null });
-  const smaller_m = Math.min(footing.breadth_m, footing.length_m);
-  if (value.minBreadth_m !== null && smaller_m < value.minBreadth_m)
-    add(
-      "breadth",
-      `The smaller side ${smaller_m} m is less than the smallest breadth the value holds for, ${value.minBreadth_m} m.`,
-    );
-  if (value.maxBreadth_m !== null && smaller_m > value.maxBreadth_m)
-    add(
-      "breadth",
-      `The smaller side ${smaller_m} m is more than the largest breadth the value holds for, ${value.maxBreadth_m} m.`,
-    );
-  if (
-    value.minFoundingDepth_m !== null &&
-    depth_m < value.minFoundingDepth_m &&
-    !close(depth_m, value.minFoundingDepth_m)
-  )
-    add(
-      "cover",
-      `The founding depth ${rounded(depth_m)} m is less than the smallest cover the value asks for, ${value.minFoundingDepth_m} m.`,
-    );
-  if (tableLimit !== null) add("table", tableLimit);
-}
-
-/** A depth is a difference of levels: 102.40 − 101.20 is 1.2 m, whatever the last binary digit says. */
-const close = (one: number, other: number): boolean => Math.abs(one - other) <= 1e-9;
-const rounded = (value: number, digits = 3): number => Number(value.toFixed(digits));
-
-function collectFailures(
-  r: CombinationResult,
-  criteria: FootingCheckInput["criteria"],
-  findings: Finding[],
-): void {
-  const add = (code: string, severity: Finding["severity"], message: string) =>
-    findings.push({ code, severity, message, combination: r.name });
-  if (!r.equilibrium)
-    add(
-      "no-equilibrium",
-      "fails",
-      r.baseVertical_kN > 0
-        ? "No equilibrium: the resultant falls on or outside the edge of the base."
-        : "No equilibrium: nothing presses the base down.",
-    );
-  if (r.utilisationBearing !== null && !(r.utilisationBearing <= 1))
-    add(
-      "bearing",
-      "fails",
-      `Bearing: ${rounded(r.demandNet_kPa as number, 1)} kPa net against ${rounded(r.capacityNet_kPa as number, 1)} kPa allowed.`,
-    );
-  else if (r.utilisationBearing === null && r.equilibrium && r.netAllowable_kPa !== null)
-    add("bearing", "fails", "Bearing: the ground has no resistance left under this inclination of the load.");
-  if (r.utilisationContact !== null && !(r.utilisationContact <= 1))
-    add(
-      r.duration === "permanent" ? "middle-third" : "contact",
-      "fails",
-      r.duration === "permanent"
-        ? `The permanent resultant leaves the middle third: 6|eB|/B + 6|eL|/L is ${rounded(r.kernSum as number)}.`
-        : `Only ${rounded(r.contactRatio * 100, 1)} % of the base is in contact.`,
-    );
-  if (!(r.utilisationSliding !== null && r.utilisationSliding <= 1))
-    add(
-      "sliding",
-      "fails",
-      `Sliding: factor ${rounded(r.factorSliding ?? 0, 2)} where ${criteria.slidingFactor} is asked.`,
-    );
-  if (!(r.utilisationOverturning !== null && r.utilisationOverturning <= 1))
-    add(
-      "overturning",
-      "fails",
-      `Overturning: factor ${rounded(r.factorOverturning ?? 0, 2)} where ${criteria.overturningFactor} is asked.`,
-    );
-  if (!(r.utilisationUplift !== null && r.utilisationUplift <= 1))
-    add(
-      "uplift",
-      "fails",
-      `Uplift: factor ${rounded(r.factorUplift ?? 0, 2)} where ${criteria.upliftFactor} is asked.`,
-    );
-  if (r.equilibrium && !r.withinMiddleThird && r.utilisationContact !== null && r.utilisationContact <= 1)
-    add("partial-contact", "note", `${rounded(r.contactRatio * 100, 1)} % of the base is in contact.`);
 }

@@ -3,14 +3,23 @@ import { formula } from "@/lib/methods/formula";
 /** Unit weight of water (kN/m³). */
 export const WATER_kNm3 = 9.81;
 
+/** Levels are told in millimetres; beyond a nanometre their difference is binary rounding: 10 − 8.8 is 1.2. */
+const betweenLevels = (upper_m: number, lower_m: number): number =>
+  Math.round((upper_m - lower_m) * 1e9) / 1e9;
+
 export const foundingDepth = formula({
   symbol: "D",
   unit: "m",
   ref: "statics",
   shown: "GL − FL",
   symbols: { GL: "groundLevel_m", FL: "foundingLevel_m" },
-  of: (q: { groundLevel_m: number; foundingLevel_m: number }) => q.groundLevel_m - q.foundingLevel_m,
+  of: (q: { groundLevel_m: number; foundingLevel_m: number }) =>
+    betweenLevels(q.groundLevel_m, q.foundingLevel_m),
 });
+
+/** Head of water above the founding level; none where no water is stated. */
+export const waterHead = (groundwaterLevel_m: number | null, foundingLevel_m: number): number =>
+  groundwaterLevel_m === null ? 0 : Math.max(0, betweenLevels(groundwaterLevel_m, foundingLevel_m));
 
 export const padWeight = formula({
   symbol: "W_pad",
@@ -87,12 +96,63 @@ export const bearingDemand = formula({
   of: (q: { pressure_kPa: number; overburden_kPa: number }) => q.pressure_kPa - q.overburden_kPa,
 });
 
+/** The net allowable pressure that the combination asks for: the duration factor is granted by the value or is one. */
+export const requiredNet = formula({
+  symbol: "q_req",
+  unit: "kPa",
+  ref: "statics",
+  shown: "q_net / f",
+  symbols: { q_net: "demandNet_kPa", f: "durationFactor" },
+  of: (q: { demandNet_kPa: number; durationFactor: number }) => q.demandNet_kPa / q.durationFactor,
+});
+
 export const bearingUtilisation = formula({
   symbol: "u_bearing",
   unit: "",
   ref: "statics",
-  shown: "q_net / (q_net,a f)",
-  symbols: { q_net: "demandNet_kPa", "q_net,a": "netAllowable_kPa", f: "durationFactor" },
-  of: (q: { demandNet_kPa: number; netAllowable_kPa: number; durationFactor: number }) =>
-    Math.max(0, q.demandNet_kPa / (q.netAllowable_kPa * q.durationFactor)),
+  shown: "max(0, q_req / q_net,a)",
+  symbols: { q_req: "requiredNet_kPa", "q_net,a": "netAllowable_kPa" },
+  of: (q: { requiredNet_kPa: number; netAllowable_kPa: number }) =>
+    Math.max(0, q.requiredNet_kPa / q.netAllowable_kPa),
+});
+
+/** Uniform pressure on the effective area. */
+export const effectivePressure = formula({
+  symbol: "q_eff",
+  unit: "kPa",
+  ref: "meyerhof1953",
+  shown: "V′ / (B′ L′)",
+  symbols: { "V′": "vertical_kN", "B′": "effectiveBreadth_m", "L′": "effectiveLength_m" },
+  of: (q: { vertical_kN: number; effectiveBreadth_m: number; effectiveLength_m: number }) =>
+    q.vertical_kN / (q.effectiveBreadth_m * q.effectiveLength_m),
+});
+
+export const contactArea = formula({
+  symbol: "A_c",
+  unit: "m²",
+  ref: "statics",
+  shown: "α B L",
+  symbols: { α: "contactRatio", B: "breadth_m", L: "length_m" },
+  of: (q: { contactRatio: number; breadth_m: number; length_m: number }) =>
+    q.contactRatio * q.breadth_m * q.length_m,
+});
+
+/** What holds down: a column that pulls does not. */
+export const stabilisingLoad = formula({
+  symbol: "G_stb",
+  unit: "kN",
+  ref: "statics",
+  shown: "max(0, N) + W_pad + W_fill",
+  symbols: { N: "vertical_kN", W_pad: "padWeight_kN", W_fill: "backfillWeight_kN" },
+  of: (q: { vertical_kN: number; padWeight_kN: number; backfillWeight_kN: number }) =>
+    Math.max(0, q.vertical_kN) + q.padWeight_kN + q.backfillWeight_kN,
+});
+
+export const upliftLoad = formula({
+  symbol: "U_dst",
+  unit: "kN",
+  ref: "statics",
+  shown: "U + max(0, −N)",
+  symbols: { U: "buoyancy_kN", N: "vertical_kN" },
+  of: (q: { buoyancy_kN: number; vertical_kN: number }) => q.buoyancy_kN + Math.max(0, -q.vertical_kN),
 });

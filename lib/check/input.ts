@@ -141,6 +141,15 @@ export type CheckedLoad = FootingCheckInput["loads"][number];
 export type CheckedValue = FootingCheckInput["value"];
 export type CheckVerdict = "passes" | "fails" | "outside conditions";
 export type Severity = "fails" | "outside" | "warning" | "note";
+/** What a combination is measured against; `equilibrium` where nothing else can be measured. */
+export type Requirement =
+  | "bearing"
+  | "middle third"
+  | "contact"
+  | "sliding"
+  | "overturning"
+  | "uplift"
+  | "equilibrium";
 
 /** One thing to say about a check: a code to sort by, a sentence to read, the combination it is about. */
 export type Finding = { code: string; severity: Severity; message: string; combination: string | null };
@@ -162,11 +171,14 @@ export type CombinationResult = {
   minPressure_kPa: number | null;
   cornerPressures_kPa: [number, number, number, number] | null;
   contactRatio: number;
+  contactArea_m2: number;
   effectiveBreadth_m: number;
   effectiveLength_m: number;
   effectivePressure_kPa: number | null;
   demandNet_kPa: number | null;
   durationFactor: number;
+  /** Gross ultimate bearing pressure, where the value is computed from soil parameters. */
+  ultimate_kPa: number | null;
   netAllowable_kPa: number | null;
   capacityNet_kPa: number | null;
   requiredNet_kPa: number | null;
@@ -176,18 +188,24 @@ export type CombinationResult = {
   slidingApplied_kN: number;
   factorSliding: number | null;
   utilisationSliding: number | null;
+  factorOverturningB: number | null;
+  factorOverturningL: number | null;
   factorOverturning: number | null;
   utilisationOverturning: number | null;
+  stabilising_kN: number;
+  uplift_kN: number;
   factorUplift: number | null;
   utilisationUplift: number | null;
   /** Largest of the above; null where one of them has no bound. */
   utilisation: number | null;
+  governedBy: Requirement;
 };
 
 /** The result of a check; figures that have no bound are null and the verdict says so. */
 export type FootingCheckResult = {
   verdict: CheckVerdict;
   governingCombination: string;
+  governedBy: Requirement;
   utilisation: number | null;
   utilisationBearing: number | null;
   requiredNet_kPa: number | null;
@@ -211,6 +229,7 @@ const figureOrNull = (label: string, unit = "") => output(label, unit).nullable(
 export const footingCheckOutput = z.looseObject({
   verdict: z.enum(["passes", "fails", "outside conditions"]).meta({ label: "Verdict", unit: "" }),
   governingCombination: z.string().meta({ label: "Governing combination", unit: "" }),
+  governedBy: z.string().meta({ label: "Requirement that governs", unit: "" }),
   utilisation: figureOrNull("Utilisation"),
   utilisationBearing: figureOrNull("Utilisation in bearing"),
   requiredNet_kPa: figureOrNull("Required net allowable bearing pressure", "kPa"),

@@ -36,10 +36,9 @@ export function line<Quantities extends Record<string, number>>(
   quantities: Quantities,
 ): Line {
   const names = Object.keys(formula.symbols).sort((one, other) => other.length - one.length);
-  const pattern = new RegExp(
-    names.map((name) => name.replace(/[.*+?^${}()|[\]\\]/g, "\\$&")).join("|"),
-    "gu",
-  );
+  const any = names.map((name) => name.replace(/[.*+?^${}()|[\]\\]/g, "\\$&")).join("|");
+  // A symbol stands alone: the a of an adhesion is not the a of tan.
+  const pattern = new RegExp(`(?<![\\p{L}\\d_′])(?:${any})(?![\\p{L}\\d_′])`, "gu");
   const numbers =
     names.length === 0
       ? formula.shown

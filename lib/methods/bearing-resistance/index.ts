@@ -1,10 +1,50 @@
 import { z } from "zod";
 import { bearingFactorsOf, type Theory, theories } from "../bearing-factors/index";
-import { defineMethod, output, quantity } from "../define-method";
-import { depthFactors, inclinationFactors, type Situation, shapeFactors } from "./factors";
+import { defineMethod, type MethodFinding, output, quantity } from "../define-method";
+import { formula, type Line, line } from "../formula";
+import { depthFactors, inclinationFactors, type Situation, shapeFactors, type Triple } from "./factors";
 
 const degree = Math.PI / 180;
 const WATER_kNm3 = 9.81;
+
+export const fromCohesion = formula({
+  symbol: "q_c",
+  unit: "kPa",
+  ref: "terzaghi1943",
+  shown: "c N_c k_c",
+  symbols: { c: "cohesion_kPa", N_c: "nc", k_c: "share" },
+  of: (q: { cohesion_kPa: number; nc: number; share: number }) => q.cohesion_kPa * q.nc * q.share,
+});
+
+export const fromSurcharge = formula({
+  symbol: "q_q",
+  unit: "kPa",
+  ref: "terzaghi1943",
+  shown: "σ0 N_q k_q",
+  symbols: { σ0: "surcharge_kPa", N_q: "nq", k_q: "share" },
+  of: (q: { surcharge_kPa: number; nq: number; share: number }) => q.surcharge_kPa * q.nq * q.share,
+});
+
+export const fromWeight = formula({
+  symbol: "q_γ",
+  unit: "kPa",
+  ref: "terzaghi1943",
+  shown: "0.5 γ B′ N_γ k_γ",
+  symbols: { γ: "unitWeight_kNm3", "B′": "breadth_m", N_γ: "nGamma", k_γ: "share" },
+  of: (q: { unitWeight_kNm3: number; breadth_m: number; nGamma: number; share: number }) =>
+    0.5 * q.unitWeight_kNm3 * q.breadth_m * q.nGamma * q.share,
+});
+
+/** Gross: overburden is in it. Each k is the product of shape, depth, inclination and base factors of one author. */
+export const ultimatePressure = formula({
+  symbol: "q_ult",
+  unit: "kPa",
+  ref: "terzaghi1943",
+  shown: "q_c + q_q + q_γ",
+  symbols: { q_c: "fromCohesion_kPa", q_q: "fromSurcharge_kPa", q_γ: "fromWeight_kPa" },
+  of: (q: { fromCohesion_kPa: number; fromSurcharge_kPa: number; fromWeight_kPa: number }) =>
+    q.fromCohesion_kPa + q.fromSurcharge_kPa + q.fromWeight_kPa,
+});
 
 export type BearingCase = {
   theory: Theory;
@@ -49,11 +89,18 @@ export function bearingResistanceOf(given: BearingCase) {
   const i = inclinationFactors(situation);
   const b = baseFactors(given, nc, frictionAngle_deg, undrained);
   const unitWeight_kNm3 = weightBelow(given);
-  const fromCohesion_kPa = given.cohesion_kPa * nc * s.c * d.c * i.c * b.c;
-  const fromSurcharge_kPa = given.surcharge_kPa * nq * s.q * d.q * i.q * b.q;
-  const fromWeight_kPa =
-    0.5 * unitWeight_kNm3 * given.effectiveBreadth_m * nGamma * s.gamma * d.gamma * i.gamma * b.gamma;
-  const ultimate_kPa = fromCohesion_kPa + fromSurcharge_kPa + fromWeight_kPa;
+  const c = cohesionShare(given.theory, undrained, s, d, i, b);
+  const q = s.q * d.q * i.q * b.q;
+  const gamma = s.gamma * d.gamma * i.gamma * b.gamma;
+  const fromCohesion_kPa = fromCohesion.of({ cohesion_kPa: given.cohesion_kPa, nc, share: c });
+  const fromSurcharge_kPa = fromSurcharge.of({ surcharge_kPa: given.surcharge_kPa, nq, share: q });
+  const fromWeight_kPa = fromWeight.of({
+    unitWeight_kNm3,
+    breadth_m: given.effectiveBreadth_m,
+    nGamma,
+    share: gamma,
+  });
+  const ultimate_kPa = ultimatePressure.of({ fromCohesion_kPa, fromSurcharge_kPa, fromWeight_kPa });
   return {
     nc,
     nq,
@@ -70,6 +117,9 @@ export function bearingResistanceOf(given: BearingCase) {
     bc: b.c,
     bq: b.q,
     bGamma: b.gamma,
+    shareC: c,
+    shareQ: q,
+    shareGamma: gamma,
     unitWeight_kNm3,
     fromCohesion_kPa,
     fromSurcharge_kPa,
@@ -77,6 +127,19 @@ export function bearingResistanceOf(given: BearingCase) {
     ultimate_kPa,
     netUltimate_kPa: ultimate_kPa - given.surcharge_kPa,
   };
+}
+
+/** All factors on the cohesion term. Hansen adds his undrained corrections where the others multiply. */
+function cohesionShare(
+  theory: Theory,
+  undrained: boolean,
+  s: Triple,
+  d: Triple,
+  i: Triple,
+  b: Triple,
+): number {
+  if (undrained && theory === "hansen") return Math.max(0, s.c + d.c + i.c + b.c - 3);
+  return s.c * d.c * i.c * b.c;
 }
 
 /** Factors for a tilted underside; Terzaghi and Meyerhof give none. */
@@ -165,6 +228,9 @@ export const bearingResistance = defineMethod({
     bc: output("bc"),
     bq: output("bq"),
     bGamma: output("bγ"),
+    shareC: output("All factors on cohesion k_c"),
+    shareQ: output("All factors on overburden k_q"),
+    shareGamma: output("All factors on weight k_γ"),
     unitWeight_kNm3: output("Unit weight used", "kN/m³"),
     fromCohesion_kPa: output("From cohesion", "kPa"),
     fromSurcharge_kPa: output("From overburden", "kPa"),
@@ -173,4 +239,68 @@ export const bearingResistance = defineMethod({
     netUltimate_kPa: output("Ultimate bearing pressure, net", "kPa"),
   }),
   compute: bearingResistanceOf,
+  lines: resistanceLines,
+  findings: resistanceFindings,
 });
+
+export type BearingResistance = ReturnType<typeof bearingResistanceOf>;
+
+/** The steps of a resistance, for the sheet. */
+export function resistanceLines(given: BearingCase, r: BearingResistance): Line[] {
+  return [
+    line(fromCohesion, { cohesion_kPa: given.cohesion_kPa, nc: r.nc, share: r.shareC }),
+    line(fromSurcharge, { surcharge_kPa: given.surcharge_kPa, nq: r.nq, share: r.shareQ }),
+    line(fromWeight, {
+      unitWeight_kNm3: r.unitWeight_kNm3,
+      breadth_m: given.effectiveBreadth_m,
+      nGamma: r.nGamma,
+      share: r.shareGamma,
+    }),
+    line(ultimatePressure, r),
+  ];
+}
+
+function resistanceFindings(given: BearingCase, r: BearingResistance): MethodFinding[] {
+  const found: MethodFinding[] = [];
+  const { theory, horizontal_kN, drainage } = given;
+  if (theory === "terzaghi" && horizontal_kN > 0)
+    found.push({
+      code: "no-inclination",
+      severity: "outside",
+      message: "Terzaghi gives no inclination factors: the horizontal load is not in this resistance.",
+    });
+  if ((theory === "terzaghi" || theory === "meyerhof") && given.baseTilt_deg > 0)
+    found.push({
+      code: "no-tilt",
+      severity: "outside",
+      message: "This theory gives no factors for a tilted base: the tilt is not in this resistance.",
+    });
+  if (horizontal_kN > 0 && theory !== "terzaghi" && (r.ic === 0 || (drainage === "drained" && r.iq === 0)))
+    found.push({
+      code: "sliding-governs",
+      severity: "outside",
+      message: "The horizontal load is more than the base can hold: it slides before it bears.",
+    });
+  if (drainage === "drained" && given.frictionAngle_deg > 45)
+    found.push({
+      code: "high-friction",
+      severity: "warning",
+      message: "Above 45° the factors grow so fast that the angle has to be proved for this stress.",
+    });
+  if (drainage === "undrained" && given.frictionAngle_deg > 0)
+    found.push({
+      code: "friction-not-used",
+      severity: "note",
+      message: "Undrained resistance counts no friction: the angle given was not used.",
+    });
+  if (
+    (theory === "hansen" || theory === "vesic" || theory === "meyerhof") &&
+    given.depth_m > 2.5 * given.effectiveBreadth_m
+  )
+    found.push({
+      code: "deep",
+      severity: "warning",
+      message: "The depth is more than 2.5 times the breadth: these are factors for shallow bases.",
+    });
+  return found;
+}

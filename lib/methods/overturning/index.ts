@@ -13,6 +13,16 @@ export const holdingMoment = formula({
   of: (q: { vertical_kN: number; side_m: number }) => (q.vertical_kN * q.side_m) / 2,
 });
 
+/** Factor of safety about one edge. */
+export const overturningFactor = formula({
+  symbol: "F",
+  unit: "",
+  ref: "statics",
+  shown: "M_stb / |M|",
+  symbols: { M_stb: "holding_kNm", "|M|": "moment_kNm" },
+  of: (q: { holding_kNm: number; moment_kNm: number }) => q.holding_kNm / q.moment_kNm,
+});
+
 /** Factors about the edges that the moments press down, and the smaller; null where no moment acts. */
 export function overturningFactors(q: {
   breadth_m: number;

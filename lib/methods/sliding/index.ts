@@ -41,9 +41,21 @@ export const slidingApplied = formula({
     Math.hypot(q.horizontalB_kN, q.horizontalL_kN),
 });
 
-/** Resistance over what is applied; null when nothing is applied. */
-export const factorOver = (capacity: number, demand: number): number | null =>
-  demand > 0 ? capacity / demand : null;
+/** Factor of safety against sliding. */
+export const slidingFactor = formula({
+  symbol: "F",
+  unit: "",
+  ref: "statics",
+  shown: "R / H",
+  symbols: { R: "resistance_kN", H: "applied_kN" },
+  of: (q: { resistance_kN: number; applied_kN: number }) => q.resistance_kN / q.applied_kN,
+});
+
+/** Resistance over what is applied; null when nothing is applied, or so little that the factor has no size. */
+export function factorOver(capacity: number, demand: number): number | null {
+  const factor = capacity / demand;
+  return demand > 0 && factor < Number.POSITIVE_INFINITY ? factor : null;
+}
 
 const inputs = z.strictObject({
   vertical_kN: quantity({ label: "Effective vertical load", unit: "kN", min: 0 }),
