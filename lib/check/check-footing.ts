@@ -5,7 +5,7 @@ import { overturningFactors } from "@/lib/methods/overturning/index";
 import { factorOver, slidingApplied, slidingResistance } from "@/lib/methods/sliding/index";
 import { computedAllowable, statedAllowable } from "./allowable";
 import { assertUsable } from "./assert-usable";
-import { collectFailures, collectNotes, collectOutside } from "./findings";
+import { collectFailures, collectNotes, collectOutside, notePartialContact } from "./findings";
 import {
   backfillWeight,
   baseMoment,
@@ -107,6 +107,7 @@ export function checkFooting(input: FootingCheckInput): FootingCheckResult {
     factorUplift = smaller(factorUplift, result.factorUplift);
     collectFailures(result, input, findings);
   }
+  if (minContactRatio < 1) notePartialContact(input, combinations, findings);
   collectNotes(input, fixed, findings);
   const utilisation = Number.isFinite(worst) ? worst : null;
   return {

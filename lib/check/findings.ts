@@ -42,9 +42,10 @@ export function collectOutside(
 /** Says which requirements one combination does not meet, each with the figures that decide. */
 export function collectFailures(
   r: CombinationResult,
-  { footing, criteria }: FootingCheckInput,
+  { criteria }: FootingCheckInput,
   findings: Finding[],
 ): void {
+  if (r.utilisation !== null && r.utilisation <= 1) return;
   const add = (code: string, severity: Finding["severity"], message: string) =>
     findings.push({ code, severity, message, combination: r.name });
   if (!r.equilibrium)
@@ -87,15 +88,44 @@ export function collectFailures(
     const [factor, asked] = apart(r.factorUplift ?? 0, criteria.upliftFactor, 2);
     add("uplift", "fails", `Uplift: factor ${factor} where ${asked} is asked.`);
   }
-  if (!r.equilibrium || r.withinMiddleThird || !withinContact) return;
-  add("partial-contact", "note", `${rounded(r.contactRatio * 100, 1)} % of the base is in contact.`);
-  const { breadth_m, length_m } = footing;
-  if (Math.abs(r.eccentricityB_m ?? 0) > breadth_m / 3 || Math.abs(r.eccentricityL_m ?? 0) > length_m / 3)
-    add(
-      "large-eccentricity",
-      "warning",
-      "The eccentricity is more than a third of the side: review the actions and allow for a tolerance of up to 0.10 m in the position of the edge (EN 1997-1:2004, 6.5.4).",
-    );
+}
+
+/** Says, once for the pad, that part of its base lifts although no requirement is broken by that. */
+export function notePartialContact(
+  { footing }: FootingCheckInput,
+  combinations: readonly CombinationResult[],
+  findings: Finding[],
+): void {
+  let least: CombinationResult | null = null;
+  let most: CombinationResult | null = null;
+  let number = 0;
+  let share = 1 / 3;
+  for (const result of combinations) {
+    if (!result.equilibrium || result.withinMiddleThird) continue;
+    number += 1;
+    if (least === null || result.contactRatio < least.contactRatio) least = result;
+    const alongB = Math.abs(result.eccentricityB_m ?? 0) / footing.breadth_m;
+    const alongL = Math.abs(result.eccentricityL_m ?? 0) / footing.length_m;
+    if (Math.max(alongB, alongL) > share) {
+      share = Math.max(alongB, alongL);
+      most = result;
+    }
+  }
+  if (least !== null)
+    findings.push({
+      code: "partial-contact",
+      severity: "note",
+      message: `Part of the base lifts in ${number} of ${combinations.length} combinations; ${rounded(least.contactRatio * 100, 1)} % stays in contact at the least.`,
+      combination: least.name,
+    });
+  if (most !== null)
+    findings.push({
+      code: "large-eccentricity",
+      severity: "warning",
+      message:
+        "The eccentricity is more than a third of the side: review the actions and allow for a tolerance of up to 0.10 m in the position of the edge (EN 1997-1:2004, 6.5.4).",
+      combination: most.name,
+    });
 }
 
 /** Says what a reader should know of the pad as a whole, whatever the loads. */

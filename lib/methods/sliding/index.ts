@@ -38,7 +38,7 @@ export const slidingApplied = formula({
   shown: "√(H_B² + H_L²)",
   symbols: { H_B: "horizontalB_kN", H_L: "horizontalL_kN" },
   of: (q: { horizontalB_kN: number; horizontalL_kN: number }) =>
-    Math.hypot(q.horizontalB_kN, q.horizontalL_kN),
+    Math.sqrt(q.horizontalB_kN * q.horizontalB_kN + q.horizontalL_kN * q.horizontalL_kN),
 });
 
 /** Factor of safety against sliding. */
