@@ -37,7 +37,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
         name={name}
         value={filter[name] ?? ""}
         onChange={(event) => set(name, event.target.value)}
-        className="mt-0.5 max-w-44 border border-rule bg-sheet px-2 py-1"
+        className="mt-0.5 max-w-44 border border-field bg-sheet px-2 py-1"
       >
         <option value="">any</option>
         {options.map(([value, title]) => (
@@ -72,7 +72,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
             type="search"
             defaultValue={filter.search ?? ""}
             maxLength={100}
-            className="mt-0.5 w-44 border border-rule bg-sheet px-2 py-1"
+            className="mt-0.5 w-44 border border-field bg-sheet px-2 py-1"
           />
         </label>
         {choose("verdict", "Verdict", [
@@ -118,7 +118,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
             aria-label="Utilisation from"
             inputMode="decimal"
             defaultValue={filter.utilisationFrom ?? ""}
-            className="w-16 border border-rule bg-sheet px-2 py-1 text-right tabular-nums"
+            className="w-16 border border-field bg-sheet px-2 py-1 text-right tabular-nums"
           />
           <span aria-hidden="true">to</span>
           <input
@@ -127,7 +127,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
             aria-label="Utilisation to"
             inputMode="decimal"
             defaultValue={filter.utilisationTo ?? ""}
-            className="w-16 border border-rule bg-sheet px-2 py-1 text-right tabular-nums"
+            className="w-16 border border-field bg-sheet px-2 py-1 text-right tabular-nums"
           />
         </fieldset>
         <label className="block">
@@ -136,7 +136,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
             name="sort"
             value={filter.sort ?? "mark"}
             onChange={(event) => set("sort", event.target.value === "mark" ? "" : event.target.value)}
-            className="mt-0.5 border border-rule bg-sheet px-2 py-1"
+            className="mt-0.5 border border-field bg-sheet px-2 py-1"
           >
             {sorts.map(([value, title]) => (
               <option key={value} value={value}>
@@ -153,7 +153,7 @@ export function FilterBar({ filter, choices, counts, onChange }: Props) {
           />
           largest first
         </label>
-        <button type="submit" className="border border-rule px-3 py-1">
+        <button type="submit" className="border border-field px-3 py-1">
           Search
         </button>
         {narrowed && (

@@ -2,8 +2,8 @@
 
 import { useRouter } from "next/navigation";
 import { type FormEvent, useRef, useState } from "react";
-import { Notice } from "@/components/account/notice";
 import { TextField } from "@/components/account/text-field";
+import { Notice } from "@/components/ui/notice";
 import type { Refused } from "@/lib/client/send";
 import { useFootingChange } from "@/lib/client/use-footings";
 import type { FootingDetail } from "@/lib/contracts/footings";
@@ -101,7 +101,7 @@ export function FootingForm({ projectId, owners, footing, datum, grid }: Props) 
             name="ownerId"
             defaultValue={footing?.owner?.id ?? ""}
             aria-invalid={refused?.fields.ownerId ? true : undefined}
-            className="mt-1 block w-full border border-rule bg-sheet px-2 py-1.5"
+            className="mt-1 block w-full border border-field bg-sheet px-2 py-1.5"
           >
             <option value="">{footing ? "nobody" : "whoever registers it"}</option>
             {owners.map(({ id, name }) => (
@@ -140,8 +140,16 @@ export function FootingForm({ projectId, owners, footing, datum, grid }: Props) 
           problem={refused?.fields.reason}
         />
       )}
-      {refused && <Notice kind="refused">{refused.detail}</Notice>}
-      {said && <Notice kind="done">{said}</Notice>}
+      {refused && (
+        <Notice kind="refused" className="mt-3">
+          {refused.detail}
+        </Notice>
+      )}
+      {said && (
+        <Notice kind="done" className="mt-3">
+          {said}
+        </Notice>
+      )}
       <button type="submit" aria-disabled={busy} className="mt-5 bg-action px-4 py-2 text-on-action">
         {busy ? "One moment …" : footing ? "Save as the next revision" : "Register the footing"}
       </button>

@@ -2,14 +2,14 @@
 
 import Link from "next/link";
 import { useMemo, useState } from "react";
-import { Notice } from "@/components/account/notice";
 import { Sign } from "@/components/figures/sign";
+import { Notice } from "@/components/ui/notice";
 import { useCheck, useRunChecks } from "@/lib/client/use-checks";
 import { useFooting } from "@/lib/client/use-footings";
 import type { CheckDetail, RunChecksAnswer } from "@/lib/contracts/checks";
 import { stageTitles } from "@/lib/contracts/footing-words";
 import type { FootingChoices, FootingDetail } from "@/lib/contracts/footings";
-import { Caution } from "./caution";
+import { CheckCaution } from "./caution";
 import { CheckAnswer } from "./check-answer";
 import { CheckResult } from "./check-result";
 import { FootingForm } from "./footing-form";
@@ -128,7 +128,7 @@ export function FootingSheet({
           )}
         </span>
         {may.link && (
-          <button type="button" className="border border-rule px-3 py-1.5" onClick={() => setLinking(true)}>
+          <button type="button" className="border border-field px-3 py-1.5" onClick={() => setLinking(true)}>
             {footing.value ? "Change the link" : "Link to a value"}
           </button>
         )}
@@ -143,8 +143,16 @@ export function FootingSheet({
           </button>
         )}
       </div>
-      {problem && <Notice kind="refused">{problem}</Notice>}
-      {query.isError && <Notice kind="refused">{query.error.message}</Notice>}
+      {problem && (
+        <Notice kind="refused" className="mt-3">
+          {problem}
+        </Notice>
+      )}
+      {query.isError && (
+        <Notice kind="refused" className="mt-3">
+          {query.error.message}
+        </Notice>
+      )}
       {answer && answer.notCheckedCount > 0 && <CheckAnswer projectId={projectId} answer={answer} />}
       <dl className="mt-4 grid max-w-4xl gap-x-8 sm:grid-cols-2">
         {facts.map(([label, text]) => (
@@ -194,10 +202,14 @@ export function FootingSheet({
         </>
       )}
       {checkId !== null && check.isPending && <p className="mt-8 h-96 text-ink-2">Reading the check …</p>}
-      {check.isError && <Notice kind="refused">{check.error.message}</Notice>}
+      {check.isError && (
+        <Notice kind="refused" className="mt-3">
+          {check.error.message}
+        </Notice>
+      )}
       <StagePanel projectId={projectId} footing={footing} today={today} mayRecord={may.stage} />
       <Histories footing={footing} shownCheck={checkId} onCheck={setEarlier} />
-      <Caution />
+      <CheckCaution />
       {linking && (
         <LinkDialog
           projectId={projectId}

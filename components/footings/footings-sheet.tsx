@@ -3,7 +3,9 @@
 import Link from "next/link";
 import { usePathname, useRouter, useSearchParams } from "next/navigation";
 import { useCallback, useMemo, useState } from "react";
-import { Notice } from "@/components/account/notice";
+import { ButtonLink } from "@/components/ui/button";
+import { Empty } from "@/components/ui/empty";
+import { Notice } from "@/components/ui/notice";
 import { useRunChecks } from "@/lib/client/use-checks";
 import { allFootingIds, type FootingFilter, useFootings } from "@/lib/client/use-footings";
 import type { RunChecksAnswer } from "@/lib/contracts/checks";
@@ -73,7 +75,7 @@ export function FootingsSheet({ projectId, first, firstFilter, choices, may }: P
     setAnswer(null);
     setSaid(sentence);
   };
-  const button = "border border-rule px-3 py-1.5 aria-disabled:opacity-60";
+  const button = "border border-field px-3 py-1.5 aria-disabled:opacity-60";
   const empty = items.length === 0 && !list.isFetching && !list.isError;
 
   return (
@@ -103,10 +105,18 @@ export function FootingsSheet({ projectId, first, firstFilter, choices, may }: P
       </div>
       {counts && <CountsLine counts={counts} />}
       <FilterBar filter={filter} choices={choices} counts={counts} onChange={onFilter} />
-      {said && <Notice kind="done">{said}</Notice>}
-      {problem && <Notice kind="refused">{problem}</Notice>}
+      {said && (
+        <Notice kind="done" className="mt-3">
+          {said}
+        </Notice>
+      )}
+      {problem && (
+        <Notice kind="refused" className="mt-3">
+          {problem}
+        </Notice>
+      )}
       {list.isError && (
-        <Notice kind="refused">
+        <Notice kind="refused" className="mt-3">
           {list.error.message}{" "}
           <button type="button" className="underline" onClick={() => void list.refetch()}>
             Try again
@@ -146,7 +156,7 @@ export function FootingsSheet({ projectId, first, firstFilter, choices, may }: P
         )}
       </div>
       {empty ? (
-        <Empty projectId={projectId} narrowed={Object.keys(filter).length > 0} mayWrite={may.write} />
+        <NoFooting projectId={projectId} narrowed={Object.keys(filter).length > 0} mayWrite={may.write} />
       ) : (
         <FootingTable
           projectId={projectId}
@@ -174,7 +184,7 @@ export function FootingsSheet({ projectId, first, firstFilter, choices, may }: P
   );
 }
 
-function Empty({
+function NoFooting({
   projectId,
   narrowed,
   mayWrite,
@@ -183,21 +193,23 @@ function Empty({
   narrowed: boolean;
   mayWrite: boolean;
 }) {
-  if (narrowed) return <p className="mt-4 text-ink-2">No footing matches.</p>;
+  if (narrowed) return <Empty title="No footing matches." className="mt-4" />;
+  if (!mayWrite)
+    return (
+      <Empty title="There is no footing yet." className="mt-4">
+        The structural engineer registers them.
+      </Empty>
+    );
   return (
-    <div className="mt-4 max-w-prose">
-      <p>There is no footing yet.</p>
-      {mayWrite ? (
-        <p className="mt-2">
-          Import the schedule from CSV, or{" "}
-          <Link href={`/projects/${projectId}/footings/new`} className="underline">
-            register the first footing
-          </Link>
-          . Then link the footings to the bearing values of their zones, and check them.
-        </p>
-      ) : (
-        <p className="mt-2 text-ink-2">The structural engineer registers them.</p>
-      )}
-    </div>
+    <Empty
+      title="There is no footing yet."
+      className="mt-4"
+      action={
+        <ButtonLink href={`/projects/${projectId}/footings/new`}>Register the first footing</ButtonLink>
+      }
+    >
+      Import the schedule from CSV, or register the first footing. Then link the footings to the bearing
+      values of their zones, and check them.
+    </Empty>
   );
 }

@@ -1,11 +1,11 @@
 "use client";
 
 import { useState } from "react";
-import { Notice } from "@/components/account/notice";
+import { Dialog } from "@/components/ui/dialog";
+import { Notice } from "@/components/ui/notice";
 import { useFootingChange } from "@/lib/client/use-footings";
 import { type LoadBasis, loadBases, loadBasisTitles } from "@/lib/contracts/footing-words";
 import type { ImportAnswer, ImportPreview } from "@/lib/contracts/footings";
-import { Dialog } from "./dialog";
 import { textOfFile } from "./file-text";
 import { ImportPreviewTables } from "./import-preview";
 
@@ -92,7 +92,7 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
     preview?.refused === null && writes > 0 && (inError === 0 || (leaveOut && what === "footings"));
 
   return (
-    <Dialog title="Import from CSV" onClose={onClose}>
+    <Dialog title="Import from CSV" open width="wide" held={step === "writing"} onClose={onClose}>
       <fieldset className="mt-4 flex gap-5" disabled={busy}>
         <legend className="sr-only">What the file holds</legend>
         {(["footings", "loads"] as const).map((each) => (
@@ -113,7 +113,7 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
                 setBasis(event.target.value as LoadBasis);
                 setPreview(null);
               }}
-              className="mt-1 w-full border border-rule bg-sheet px-2 py-1.5"
+              className="mt-1 w-full border border-field bg-sheet px-2 py-1.5"
             >
               <option value="">Choose</option>
               {loadBases.map((each) => (
@@ -129,7 +129,7 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
               value={source}
               maxLength={300}
               onChange={(event) => setSource(event.target.value)}
-              className="mt-1 w-full border border-rule bg-sheet px-2 py-1.5"
+              className="mt-1 w-full border border-field bg-sheet px-2 py-1.5"
             />
           </label>
         </div>
@@ -146,7 +146,11 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
         />
       </label>
       {file && !preview && !busy && (
-        <button type="button" className="mt-3 border border-rule px-3 py-1.5" onClick={() => void show(file)}>
+        <button
+          type="button"
+          className="mt-3 border border-field px-3 py-1.5"
+          onClick={() => void show(file)}
+        >
           Show what {file.name} would do
         </button>
       )}
@@ -156,7 +160,11 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
           <progress className="ml-3 align-middle" />
         </p>
       )}
-      {problem && <Notice kind="refused">{problem}</Notice>}
+      {problem && (
+        <Notice kind="refused" className="mt-3">
+          {problem}
+        </Notice>
+      )}
       {preview && <ImportPreviewTables preview={preview} />}
       {preview && preview.refused === null && (
         <div className="mt-4 grid gap-3">
@@ -183,7 +191,7 @@ export function ImportDialog({ projectId, onDone, onClose }: Props) {
                 value={reason}
                 maxLength={1000}
                 onChange={(event) => setReason(event.target.value)}
-                className="mt-1 w-full border border-rule bg-sheet px-2 py-1.5"
+                className="mt-1 w-full border border-field bg-sheet px-2 py-1.5"
               />
             </label>
           )}

@@ -1,4 +1,4 @@
-import { Notice } from "@/components/account/notice";
+import { Notice } from "@/components/ui/notice";
 import type { ImportPreview } from "@/lib/contracts/footings";
 
 /** What a file would do: errors first, each with its row, then what changes and what is new. */
@@ -7,7 +7,9 @@ export function ImportPreviewTables({ preview }: { preview: ImportPreview }) {
   if (refused !== null)
     return (
       <>
-        <Notice kind="refused">{refused}</Notice>
+        <Notice kind="refused" className="mt-3">
+          {refused}
+        </Notice>
         <Findings findings={findings} count={findingCount} />
       </>
     );

@@ -1,10 +1,10 @@
 "use client";
 
 import { type FormEvent, useEffect, useState } from "react";
-import { Notice } from "@/components/account/notice";
+import { Dialog } from "@/components/ui/dialog";
+import { Notice } from "@/components/ui/notice";
 import { suggestions as readSuggestions, useFootingChange } from "@/lib/client/use-footings";
 import type { FootingChoices, LinkSuggestion } from "@/lib/contracts/footings";
-import { Dialog } from "./dialog";
 import { whole } from "./shown";
 
 type Props = {
@@ -70,9 +70,16 @@ export function LinkDialog({ projectId, footingIds, values, onDone, onClose }: P
   return (
     <Dialog
       title={`Link ${footingIds.length === 1 ? "a footing" : `${footingIds.length} footings`} to a bearing value`}
+      open
+      width="wide"
+      held={busy}
       onClose={onClose}
     >
-      {problem && <Notice kind="refused">{problem}</Notice>}
+      {problem && (
+        <Notice kind="refused" className="mt-3">
+          {problem}
+        </Notice>
+      )}
       <h3 className="mt-4 font-semibold">As the zones propose</h3>
       {rows === null ? (
         <p className="mt-2 h-40 text-ink-2">{problem ? "" : "Looking which zones the footings lie in …"}</p>
@@ -87,21 +94,23 @@ export function LinkDialog({ projectId, footingIds, values, onDone, onClose }: P
             <SuggestionTable rows={proposed.slice(0, LISTED)} left={left} onLeft={setLeft} />
           )}
           {proposed.length > LISTED && <p>and {proposed.length - LISTED} more, all confirmed alike.</p>}
-          <button
-            type="button"
-            aria-disabled={busy || confirmed.length === 0}
-            className="mt-3 bg-action px-4 py-2 text-on-action aria-disabled:opacity-60"
-            onClick={() =>
-              confirmed.length > 0 &&
-              void act(
-                "footings/links",
-                { links: confirmed.map(({ footingId, valueId }) => ({ footingId, valueId })) },
-                "linked",
-              )
-            }
-          >
-            Confirm {confirmed.length} {confirmed.length === 1 ? "link" : "links"}
-          </button>
+          {proposed.length > 0 && (
+            <button
+              type="button"
+              aria-disabled={busy || confirmed.length === 0}
+              className="mt-3 bg-action px-4 py-2 text-on-action aria-disabled:opacity-60"
+              onClick={() =>
+                confirmed.length > 0 &&
+                void act(
+                  "footings/links",
+                  { links: confirmed.map(({ footingId, valueId }) => ({ footingId, valueId })) },
+                  "linked",
+                )
+              }
+            >
+              Confirm {confirmed.length} {confirmed.length === 1 ? "link" : "links"}
+            </button>
+          )}
           {open.length > 0 && (
             <details className="mt-4" open={open.length <= 10}>
               <summary>{open.length} without a proposal</summary>
@@ -125,7 +134,7 @@ export function LinkDialog({ projectId, footingIds, values, onDone, onClose }: P
           <select
             name="valueId"
             aria-invalid={fields.valueId ? true : undefined}
-            className="mt-1 w-full border border-rule bg-sheet px-2 py-1.5 aria-invalid:border-fails"
+            className="mt-1 w-full border border-field bg-sheet px-2 py-1.5 aria-invalid:border-fails"
           >
             <option value="">Choose</option>
             {values.map(({ id, label }) => (
@@ -143,14 +152,14 @@ export function LinkDialog({ projectId, footingIds, values, onDone, onClose }: P
             name="reason"
             maxLength={1000}
             aria-invalid={fields.reason ? true : undefined}
-            className="mt-1 w-full border border-rule bg-sheet px-2 py-1.5 aria-invalid:border-fails"
+            className="mt-1 w-full border border-field bg-sheet px-2 py-1.5 aria-invalid:border-fails"
           />
           {fields.reason && <span className="mt-1 block text-fails-text">{fields.reason}</span>}
         </label>
         <button
           type="submit"
           aria-disabled={busy}
-          className="justify-self-start border border-rule px-4 py-2"
+          className="justify-self-start border border-field px-4 py-2"
         >
           Link by choice
         </button>

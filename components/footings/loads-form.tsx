@@ -1,8 +1,8 @@
 "use client";
 
 import { type FormEvent, useRef, useState } from "react";
-import { Notice } from "@/components/account/notice";
 import { TextField } from "@/components/account/text-field";
+import { Notice } from "@/components/ui/notice";
 import type { Refused } from "@/lib/client/send";
 import { useFootingChange } from "@/lib/client/use-footings";
 import { durations, loadBases, loadBasisTitles } from "@/lib/contracts/footing-words";
@@ -100,7 +100,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
             defaultValue={loads?.loadBasis ?? ""}
             aria-invalid={refused?.fields.loadBasis ? true : undefined}
             aria-describedby="loadBasis-note"
-            className="mt-1 block w-full border border-rule bg-sheet px-2 py-1.5 aria-invalid:border-fails"
+            className="mt-1 block w-full border border-field bg-sheet px-2 py-1.5 aria-invalid:border-fails"
           >
             <option value="">Choose</option>
             {loadBases.map((basis) => (
@@ -162,7 +162,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
                       maxLength={60}
                       aria-invalid={problem("name") ? true : undefined}
                       onChange={(event) => set(row.key, "name", event.target.value)}
-                      className="w-48 border border-rule bg-sheet px-2 py-1 aria-invalid:border-fails"
+                      className="w-48 border border-field bg-sheet px-2 py-1 aria-invalid:border-fails"
                     />
                   </td>
                   <td className="pr-2">
@@ -170,7 +170,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
                       aria-label={`Duration of combination ${index + 1}`}
                       value={row.duration}
                       onChange={(event) => set(row.key, "duration", event.target.value)}
-                      className="border border-rule bg-sheet px-2 py-1"
+                      className="border border-field bg-sheet px-2 py-1"
                     >
                       {durations.map((duration) => (
                         <option key={duration}>{duration}</option>
@@ -185,7 +185,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
                         inputMode="decimal"
                         aria-invalid={problem(name) ? true : undefined}
                         onChange={(event) => set(row.key, name, event.target.value)}
-                        className="w-24 border border-rule bg-sheet px-2 py-1 text-right tabular-nums aria-invalid:border-fails"
+                        className="w-24 border border-field bg-sheet px-2 py-1 text-right tabular-nums aria-invalid:border-fails"
                       />
                     </td>
                   ))}
@@ -193,7 +193,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
                     <button
                       type="button"
                       className="underline"
-                      aria-label={`Take combination ${index + 1} away`}
+                      aria-label={`take away combination ${index + 1}`}
                       onClick={() => setRows(rows.filter(({ key }) => key !== row.key))}
                     >
                       take away
@@ -226,11 +226,15 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
         />
       </div>
       {refused && (
-        <Notice kind="refused">
+        <Notice kind="refused" className="mt-3">
           {[refused.detail, refused.fields.combinations].filter(Boolean).join(" ")}
         </Notice>
       )}
-      {said && <Notice kind="done">{said}</Notice>}
+      {said && (
+        <Notice kind="done" className="mt-3">
+          {said}
+        </Notice>
+      )}
       <button type="submit" aria-disabled={busy} className="mt-4 bg-action px-4 py-2 text-on-action">
         {busy ? "One moment …" : "Issue the loads"}
       </button>

@@ -1,8 +1,8 @@
 "use client";
 
 import { type FormEvent, useState } from "react";
-import { Notice } from "@/components/account/notice";
 import { TextField } from "@/components/account/text-field";
+import { Notice } from "@/components/ui/notice";
 import type { Refused } from "@/lib/client/send";
 import { useFootingChange } from "@/lib/client/use-footings";
 import { stages, stageTitles } from "@/lib/contracts/footing-words";
@@ -76,7 +76,7 @@ export function StagePanel({ projectId, footing, today, mayRecord }: Props) {
               id="stage"
               name="stage"
               defaultValue={next}
-              className="mt-1 block w-full border border-rule bg-sheet px-2 py-1.5"
+              className="mt-1 block w-full border border-field bg-sheet px-2 py-1.5"
             >
               {stages
                 .filter((stage) => stage !== footing.stage)
@@ -102,8 +102,12 @@ export function StagePanel({ projectId, footing, today, mayRecord }: Props) {
             problem={refused?.fields.note}
           />
           <div className="sm:col-span-3">
-            {refused && <Notice kind="refused">{refused.detail}</Notice>}
-            <button type="submit" aria-disabled={busy} className="mt-4 border border-rule px-4 py-2">
+            {refused && (
+              <Notice kind="refused" className="mt-3">
+                {refused.detail}
+              </Notice>
+            )}
+            <button type="submit" aria-disabled={busy} className="mt-4 border border-field px-4 py-2">
               {busy ? "One moment …" : "Record the stage"}
             </button>
           </div>

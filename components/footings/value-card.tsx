@@ -32,7 +32,7 @@ export function ValueCard({ projectId, check }: { projectId: string; check: Chec
     ["Founding level", range(register.lowestFoundingLevel_m, register.highestFoundingLevel_m, "m")],
     [
       "Groundwater assumed",
-      stated.groundwaterLevel_m === null ? "below the base" : `at ${stated.groundwaterLevel_m} m`,
+      stated.groundwaterLevel_m === null ? "none assumed" : `at ${stated.groundwaterLevel_m} m`,
     ],
     ["Unit weight of soil", `${stated.soilUnitWeight_kNm3} kN/m³`],
     [

@@ -19,7 +19,7 @@ export const uuidOf = <Brand extends string>() =>
 
 const quantity = (what: string, unit: string, least: number, most: number) =>
   z
-    .number(`${what} is a number${unit === "" ? "" : `, in ${unit}`}.`)
+    .number(`${what} is a number${unit === "" ? "" : ` in ${unit}`}, with a point before the decimals.`)
     .min(least, `${what} is at least ${least}${unit === "" ? "" : ` ${unit}`}.`)
     .max(most, `${what} is at most ${most}${unit === "" ? "" : ` ${unit}`}.`);
 

@@ -163,10 +163,15 @@ function merged(
 const rounded = (level_m: number): number => Math.round(level_m * 1e6) / 1e6;
 
 function differences(before: Geometry, after: Geometry): ImportChange[] {
-  return geometryNames
-    .filter((name) => before[name] !== after[name])
-    .map((name) => {
-      const [field, unit] = fields[name];
-      return { field, unit, before: String(before[name]), after: String(after[name]) };
-    });
+  return (
+    geometryNames
+      // A level worked out from a depth differs in its last binary digit from the one typed; nobody changed it.
+      .filter((name) => Math.abs(before[name] - after[name]) > 1e-9)
+      .map((name) => {
+        const [field, unit] = fields[name];
+        return { field, unit, before: shown(before[name]), after: shown(after[name]) };
+      })
+  );
 }
+
+const shown = (figure: number): string => String(Number(figure.toPrecision(12)));
