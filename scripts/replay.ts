@@ -21,9 +21,9 @@ for (const { project, told } of results) {
   );
   for (const { mark, seq, engineVersion, differences } of told.named) {
     console.log(`    ${mark}, check ${seq}, engine ${engineVersion}:`);
-    for (const { at, stored, now } of differences.slice(0, 10))
+    for (const { at, stored, now } of differences.slice(0, 5))
       console.log(`        ${at}: stored ${JSON.stringify(stored)}, now ${JSON.stringify(now)}`);
-    if (differences.length > 10) console.log(`        and ${differences.length - 10} more`);
+    if (differences.length > 5) console.log(`        and ${differences.length - 5} more`);
   }
 }
 if (results.length === 0) console.log("There is no project yet.");

@@ -9,7 +9,7 @@ import { type Difference, replayCheck } from "./replay";
 /** Checks are read this many at a time, so that memory does not grow with the register. */
 const BATCH = 500;
 /** How many checks that differ are named in full. */
-const NAMED = 50;
+const NAMED = 20;
 
 export type ProjectReplay = {
   checks: number;
