@@ -20,7 +20,10 @@ export async function migrate(env) {
 /** Puts the demonstration project into the database and the bucket that the environment names. */
 export async function plantDemo(env) {
   if (!existsSync(seed)) return "left out: db/seed/run.ts is not there";
-  await run([process.execPath, tsx, seed], "", { env: { ...process.env, ...quiet, ...env } }).catch(
+  // Planting needs no address that anybody opens; the letters it queues name the usual one where none is set.
+  const origin = env.APP_ORIGIN ?? env.NEXTAUTH_URL ?? process.env.APP_ORIGIN ?? "http://127.0.0.1:3000";
+  const whole = { APP_ORIGIN: origin, NEXTAUTH_URL: origin, ...process.env, ...quiet, ...env };
+  await run([process.execPath, tsx, seed], "", { env: whole }).catch(
     (error) => {
       throw new Error(`The demonstration project could not be set up:\n${error.message}`);
     },
