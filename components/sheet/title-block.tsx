@@ -35,11 +35,11 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
       ),
       className: "md:max-w-72",
     },
-    { term: "Site grid", value: facts.grid, words: facts.grid, className: "md:max-w-52" },
+    { term: "Site grid", value: facts.grid, words: facts.grid, className: "md:max-w-60" },
     { term: "Units", value: facts.units },
-    { term: "Role", value: facts.roles.join(", "), words: facts.roles.join(", "), className: "md:max-w-56" },
+    { term: "Role", value: facts.roles.join(", "), words: facts.roles.join(", "), className: "md:max-w-80" },
     { term: "Sheet", value: sheet },
-    { term: "Datum", value: facts.datum, words: facts.datum, className: "md:max-w-52" },
+    { term: "Datum", value: facts.datum, words: facts.datum, className: "md:max-w-60" },
     { term: "As of", value: <AsOf /> },
     { term: "Reader", value: <Reader facts={facts} /> },
   ];
@@ -47,9 +47,9 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
   return (
     <aside
       aria-label="Title block"
-      className="title-block sticky bottom-0 z-20 flex items-stretch justify-between border-t border-frame bg-sheet md:bottom-2.5 md:shadow-[0_0.625rem_0_var(--paper)]"
+      className="title-block sticky bottom-0 z-20 flex items-stretch justify-between border-t border-frame bg-sheet md:bottom-2.5 md:-mx-px md:border md:shadow-[0_0.625rem_0_var(--paper)]"
     >
-      <p className="max-w-sm self-end p-2.5 text-xs text-ink-2 max-xl:hidden print:block">{CAUTION}</p>
+      <p className="max-w-80 self-end p-2.5 text-xs text-ink-2 max-xl:hidden print:block">{CAUTION}</p>
       <div className="min-w-0 max-xl:w-full">
         <button
           type="button"

@@ -15,7 +15,7 @@ export function Workspace({ projectId, facts, children }: Props) {
         To the sheet
       </a>
       <IndexOfSheets projectId={projectId} />
-      <div className="workspace-sheet flex min-w-0 flex-1 flex-col border-frame bg-sheet md:border">
+      <div className="workspace-sheet flex min-w-0 flex-1 flex-col border-frame bg-sheet md:border-x md:border-t">
         <main id="sheet" tabIndex={-1} className="min-w-0 flex-1 outline-none">
           {children}
         </main>

@@ -55,7 +55,7 @@ export function HeadCell<Row>({
         <button
           type="button"
           onClick={() => onSort({ column: column.id, descending: ordered === "ascending" })}
-          className={`inline-flex items-end gap-1 hover:text-action ${figure ? "flex-row-reverse text-right" : "text-left"}`}
+          className={`inline-flex items-start gap-1 hover:text-action ${figure ? "flex-row-reverse text-right" : "text-left"}`}
         >
           <span>{words}</span>
           <SortMark ordered={ordered} />

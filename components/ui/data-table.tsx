@@ -107,6 +107,12 @@ export function DataTable<Row>(props: Props<Row>) {
     if (onEnd && ordered.length > 0 && lastShown > ordered.length - 40) onEnd();
   }, [onEnd, lastShown, ordered.length]);
 
+  // A short table on a phone is as high as its rows: a region that scrolls within one that scrolls traps the thumb.
+  const bounded = few
+    ? "max-h-[max(20rem,calc(100dvh-15rem))]"
+    : height === "page"
+      ? "md:max-h-[max(20rem,calc(100dvh-15rem))]"
+      : "";
   const width = columns.length + (onChosen ? 1 : 0);
   const allChosen = ordered.length > 0 && ordered.every((row) => chosen?.has(rowKey(row)));
   const instead = error ?? (ordered.length === 0 && !loading ? empty : undefined);
@@ -127,7 +133,7 @@ export function DataTable<Row>(props: Props<Row>) {
         aria-label={label}
         // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard.
         tabIndex={0}
-        className={`overflow-auto border border-rule bg-sheet print:max-h-none print:overflow-visible ${height === "page" ? "max-h-[max(20rem,calc(100dvh-15rem))]" : ""}`}
+        className={`overflow-auto border border-rule bg-sheet print:max-h-none print:overflow-visible ${bounded}`}
       >
         <table
           className={`w-full border-separate border-spacing-0 ${few ? "table-fixed min-w-max" : ""}`}

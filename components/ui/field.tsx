@@ -32,7 +32,7 @@ type Props = FieldProps & {
 
 /** Edge and ground of everything that is typed into. */
 export const controlLook =
-  "block min-h-8 w-full min-w-0 border border-field bg-sheet px-2 py-1 text-ink hover:border-ink aria-invalid:border-2 aria-invalid:border-fails read-only:bg-paper disabled:bg-paper disabled:text-ink-2";
+  "block min-h-8 w-full min-w-0 border border-field bg-sheet px-2 py-1 text-ink hover:border-ink aria-invalid:border-2 aria-invalid:border-fails [&[readonly]]:bg-paper disabled:bg-paper disabled:text-ink-2";
 
 /** A line of a form: label with unit above, the control, then what is wrong with it or else its hint. */
 export function Field({
