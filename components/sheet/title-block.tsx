@@ -49,8 +49,10 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
       aria-label="Title block"
       className="title-block sticky bottom-0 z-20 flex items-stretch justify-between border-t border-frame bg-sheet md:bottom-2.5 md:-mx-px md:border md:shadow-[0_0.625rem_0_var(--paper)]"
     >
-      <p className="max-w-80 self-end p-2.5 text-xs text-ink-2 max-xl:hidden print:block">{CAUTION}</p>
-      <div className="min-w-0 max-xl:w-full">
+      <p className="max-w-80 self-end p-2.5 text-xs text-ink-2 max-xl:hidden print:block print:max-w-[46mm] print:self-center">
+        {CAUTION}
+      </p>
+      <div className="min-w-0 max-xl:w-full print:flex-1">
         <button
           type="button"
           aria-expanded={open}
@@ -72,7 +74,7 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
         </button>
         <dl
           id="title-block"
-          className={`${open ? "grid" : "hidden"} grid-cols-2 max-md:border-t max-md:border-rule md:grid md:h-full md:grid-cols-[auto_auto_auto_auto] xl:border-l xl:border-frame print:grid print:grid-cols-4`}
+          className={`${open ? "grid" : "hidden"} grid-cols-2 max-md:border-t max-md:border-rule md:grid md:h-full md:grid-cols-[auto_auto_auto_auto] xl:border-l xl:border-frame print:grid print:grid-cols-[3fr_3fr_2fr_3fr] print:border-l`}
         >
           {cells.map(({ term, value, words, className = "" }) => (
             <div
@@ -80,7 +82,7 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
               className={`min-w-0 border-rule px-2.5 py-1 md:border-l md:first:border-l-0 md:[&:nth-child(5)]:border-l-0 md:[&:nth-child(n+5)]:border-t ${className}`}
             >
               <dt className="text-xs text-ink-2">{term}</dt>
-              <dd title={words} className="truncate max-md:whitespace-normal">
+              <dd title={words} className="truncate max-md:whitespace-normal print:whitespace-normal">
                 {value}
               </dd>
             </div>

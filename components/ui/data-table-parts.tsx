@@ -69,7 +69,7 @@ export function HeadCell<Row>({
 
 function SortMark({ ordered }: { ordered: "ascending" | "descending" | undefined }) {
   return (
-    <svg width="9" height="20" viewBox="0 0 9 20" aria-hidden="true" className="shrink-0">
+    <svg width="9" height="20" viewBox="0 0 9 20" aria-hidden="true" className="shrink-0 print:hidden">
       {ordered === "ascending" && <path d="M4.5 6.5L8.5 13.5H0.5Z" fill="currentColor" />}
       {ordered === "descending" && <path d="M4.5 13.5L0.5 6.5H8.5Z" fill="currentColor" />}
       {!ordered && <path d="M1.5 8L4.5 5L7.5 8M1.5 12L4.5 15L7.5 12" fill="none" stroke="var(--ink-2)" />}

@@ -30,7 +30,7 @@ export function DataRow<Row>(props: Props<Row>) {
       className="h-8 hover:bg-paper aria-[current]:bg-chosen data-chosen:bg-chosen"
     >
       {onChoose && (
-        <td className={`border-b border-rule ${edge}`}>
+        <td className={`border-b border-rule ${edge} print:hidden`}>
           <input
             type="checkbox"
             aria-label={`Choose ${label}`}

@@ -142,7 +142,7 @@ export function DataTable<Row>(props: Props<Row>) {
         >
           <caption className="sr-only">{label}</caption>
           <colgroup>
-            {onChosen && <col width={36} />}
+            {onChosen && <col width={36} className="print:hidden" />}
             {columns.map(({ id, width_px }) => (
               <col key={id} width={width_px} />
             ))}
@@ -152,7 +152,7 @@ export function DataTable<Row>(props: Props<Row>) {
               {onChosen && (
                 <th
                   scope="col"
-                  className="border-b border-frame bg-sheet px-2.5 py-1.5 text-left align-bottom"
+                  className="border-b border-frame bg-sheet px-2.5 py-1.5 text-left align-bottom print:hidden"
                 >
                   <input
                     type="checkbox"
