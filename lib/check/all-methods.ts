@@ -1,9 +1,10 @@
 import type { InputError, MethodAnswer, RegisteredMethod } from "@/lib/methods/define-method";
 import { methods } from "@/lib/methods/index";
+import { angularDistortion } from "./angular-distortion";
 import { footingCheck } from "./method";
 
 /** The published methods and the check that composes them: what the worksheet, the address and the command offer. */
-export const allMethods: readonly RegisteredMethod[] = [...methods, footingCheck];
+export const allMethods: readonly RegisteredMethod[] = [...methods, angularDistortion, footingCheck];
 
 export type UnknownMethod = { code: "unknown-method"; message: string; fields: Record<string, string> };
 export type RunAnswer = MethodAnswer | { error: InputError | UnknownMethod };
