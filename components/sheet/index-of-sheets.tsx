@@ -15,6 +15,9 @@ export function IndexOfSheets({ projectId }: { projectId: string }) {
   return (
     <nav
       aria-label="Index of sheets"
+      onKeyDown={(event) => {
+        if (event.key === "Escape") setOpen(false);
+      }}
       className="z-20 flex shrink-0 flex-col max-md:sticky max-md:top-0 max-md:border-b max-md:border-frame max-md:bg-paper md:sticky md:top-2.5 md:h-[calc(100dvh-1.25rem)] md:w-44 md:overflow-y-auto"
     >
       <div className="flex items-center justify-between gap-4 px-3 md:px-2">
@@ -41,7 +44,7 @@ export function IndexOfSheets({ projectId }: { projectId: string }) {
       </div>
       <ol
         id="index-of-sheets"
-        className={`${open ? "block" : "max-md:hidden"} max-md:border-t max-md:border-rule max-md:pb-2 md:mt-3`}
+        className={`${open ? "block" : "max-md:hidden"} max-md:absolute max-md:inset-x-0 max-md:top-full max-md:border-b max-md:border-frame max-md:bg-paper max-md:pb-2 md:mt-3`}
       >
         {sheets.map((sheet) => {
           const isHere = sheet === here;

@@ -41,7 +41,7 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
     { term: "Sheet", value: sheet },
     { term: "Datum", value: facts.datum, words: facts.datum, className: "md:max-w-60" },
     { term: "As of", value: <AsOf /> },
-    { term: "Reader", value: <Reader facts={facts} /> },
+    { term: "Signed in", value: <SignedIn facts={facts} /> },
   ];
 
   return (
@@ -113,7 +113,7 @@ const two = (part: number): string => String(part).padStart(2, "0");
 const minuteOf = (at: Date): string =>
   `${at.getFullYear()}-${two(at.getMonth() + 1)}-${two(at.getDate())} ${two(at.getHours())}:${two(at.getMinutes())}`;
 
-function Reader({ facts }: { facts: TitleBlockFacts }) {
+function SignedIn({ facts }: { facts: TitleBlockFacts }) {
   return (
     <span className="flex flex-wrap gap-x-4">
       <Link href="/account" className="underline">
