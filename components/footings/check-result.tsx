@@ -3,9 +3,9 @@
 import { useState } from "react";
 import { PressureFigure } from "@/components/figures/pressure-figure";
 import { Sign } from "@/components/figures/sign";
-import type { Severity } from "@/lib/check/input";
+import type { CombinationResult, Severity } from "@/lib/check/input";
 import type { CheckDetail } from "@/lib/contracts/checks";
-import { CombinationsTable } from "./combinations-table";
+import { CombinationsTable, governs } from "./combinations-table";
 import { FormulaLines } from "./formula-lines";
 import { fixed, momentShown, utilisationShown, whole } from "./shown";
 
@@ -20,18 +20,32 @@ export function CheckResult({ check }: { check: CheckDetail }) {
   const shown = chosen ?? governing;
   const combination = result.combinations[shown];
   const { footing, value } = snapshot.input;
+  /** The combination that governs one requirement, in brackets; nothing where none does. */
+  const governedBy = (share: (c: CombinationResult) => number | null): string => {
+    const at = governs(result.combinations, share);
+    return at === null ? "" : ` (${result.combinations[at]?.name})`;
+  };
   const summary: [string, string][] = [
     ["Utilisation", `${utilisationShown(result.utilisation)} (${result.governingCombination})`],
-    ["Bearing", utilisationShown(result.utilisationBearing)],
+    ["Bearing", `${utilisationShown(result.utilisationBearing)}${governedBy((c) => c.utilisationBearing)}`],
     ["Required value", `${whole(result.requiredNet_kPa)} kPa net`],
     ["Largest base pressure", `${whole(result.maxPressure_kPa)} kPa`],
-    ["Smallest contact", `${fixed(result.minContactRatio * 100, 0)} %`],
-    ["Factor against sliding", factor(result.factorSliding, snapshot.input.criteria.slidingFactor)],
+    [
+      "Smallest contact",
+      `${fixed(result.minContactRatio * 100, 0)} %${governedBy((c) => c.utilisationContact)}`,
+    ],
+    [
+      "Factor against sliding",
+      `${factor(result.factorSliding, snapshot.input.criteria.slidingFactor)}${governedBy((c) => c.utilisationSliding)}`,
+    ],
     [
       "Factor against overturning",
       factor(result.factorOverturning, snapshot.input.criteria.overturningFactor),
     ],
-    ["Factor against uplift", factor(result.factorUplift, snapshot.input.criteria.upliftFactor)],
+    [
+      "Factor against uplift",
+      `${factor(result.factorUplift, snapshot.input.criteria.upliftFactor)}${governedBy((c) => c.utilisationUplift)}`,
+    ],
   ];
 
   return (

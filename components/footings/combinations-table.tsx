@@ -8,7 +8,19 @@ type Props = {
   onShow: (index: number) => void;
 };
 
-type Column = { head: string; unit?: string; of: (c: CombinationResult) => string };
+type Column = {
+  head: string;
+  unit?: string;
+  of: (c: CombinationResult) => string;
+  /** A share of a limit: its largest over the combinations is marked. */
+  share?: (c: CombinationResult) => number | null;
+};
+
+const shareColumn = (head: string, share: (c: CombinationResult) => number | null): Column => ({
+  head,
+  share,
+  of: (c) => utilisationShown(share(c)),
+});
 
 const columns: Column[] = [
   { head: "V′", unit: "kN", of: (c) => whole(c.baseVertical_kN) },
@@ -27,18 +39,18 @@ const columns: Column[] = [
   { head: "Factor", of: (c) => fixed(c.durationFactor, 2) },
   { head: "Capacity", unit: "kPa", of: (c) => whole(c.capacityNet_kPa) },
   { head: "Required", unit: "kPa", of: (c) => whole(c.requiredNet_kPa) },
-  { head: "Bearing", of: (c) => utilisationShown(c.utilisationBearing) },
-  { head: "Eccentricity", of: (c) => utilisationShown(c.utilisationContact) },
+  shareColumn("Bearing", (c) => c.utilisationBearing),
+  shareColumn("Eccentricity", (c) => c.utilisationContact),
   { head: "FoS sliding", of: (c) => fixed(c.factorSliding, 2) },
-  { head: "Sliding", of: (c) => utilisationShown(c.utilisationSliding) },
+  shareColumn("Sliding", (c) => c.utilisationSliding),
   { head: "FoS overturning", of: (c) => fixed(c.factorOverturning, 2) },
-  { head: "Overturning", of: (c) => utilisationShown(c.utilisationOverturning) },
+  shareColumn("Overturning", (c) => c.utilisationOverturning),
   { head: "FoS uplift", of: (c) => fixed(c.factorUplift, 2) },
-  { head: "Uplift", of: (c) => utilisationShown(c.utilisationUplift) },
-  { head: "Utilisation", of: (c) => utilisationShown(c.utilisation) },
+  shareColumn("Uplift", (c) => c.utilisationUplift),
+  shareColumn("Utilisation", (c) => c.utilisation),
 ];
 
-/** Every combination with every intermediate figure; a dash where there is none. The largest of each utilisation is marked. */
+/** Every combination with every intermediate figure; a dash where there is none. The largest share of each limit stands out. */
 export function CombinationsTable({ combinations, governing, shown, onShow }: Props) {
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard.
@@ -81,8 +93,11 @@ export function CombinationsTable({ combinations, governing, shown, onShow }: Pr
                 {combination.name === governing && <span className="ml-1 font-semibold">governs</span>}
               </th>
               <td className="px-2 text-left">{combination.duration}</td>
-              {columns.map(({ head, of }) => (
-                <td key={head} className="px-2">
+              {columns.map(({ head, of, share }) => (
+                <td
+                  key={head}
+                  className={`px-2 ${share && governs(combinations, share) === index ? "font-semibold" : ""}`}
+                >
                   {of(combination)}
                 </td>
               ))}
@@ -92,4 +107,24 @@ export function CombinationsTable({ combinations, governing, shown, onShow }: Pr
       </table>
     </section>
   );
+}
+
+/**
+ * The combination in which a share of a limit is largest; one without a bound is larger than any. None where the share is
+ * nought throughout.
+ */
+export function governs(
+  combinations: readonly CombinationResult[],
+  share: (c: CombinationResult) => number | null,
+): number | null {
+  let most = 0;
+  let at: number | null = null;
+  combinations.forEach((combination, index) => {
+    const here = share(combination) ?? Number.POSITIVE_INFINITY;
+    if (here > most) {
+      most = here;
+      at = index;
+    }
+  });
+  return at;
 }

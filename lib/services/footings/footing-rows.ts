@@ -4,12 +4,15 @@ import type { FootingItem } from "@/lib/contracts/footings";
 import type { FootingId } from "@/lib/contracts/ids";
 import type { Context } from "../context";
 
-/** What filters and orders stand on: `f` with its size, its value, its last check and how that stands. */
-export const footingSources = sql`
+/** What filters and orders stand on, but for the standing: `f` with its size, its value and its last check. */
+export const footingsAlone = sql`
   footing f
   join footing_revision g on g.project_id = f.project_id and g.id = f.current_revision_id
   left join bearing_value v on v.project_id = f.project_id and v.id = f.value_id
-  left join footing_check k on k.project_id = f.project_id and k.id = f.latest_check_id
+  left join footing_check k on k.project_id = f.project_id and k.id = f.latest_check_id`;
+
+/** The same with the standing `s` of the last check. */
+export const footingSources = sql`${footingsAlone}
   left join check_standing s on s.project_id = f.project_id and s.check_id = f.latest_check_id`;
 
 /** Footings as lists show them, in the order of the ids given; those of other projects are left out. */

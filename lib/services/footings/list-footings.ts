@@ -14,6 +14,7 @@ import { Invalid } from "../errors";
 import { parse } from "../parse";
 import { filterFootings } from "./footing-filter";
 import { footingSources, selectFootings } from "./footing-rows";
+import { walkByMark } from "./walk-by-mark";
 
 /** A page of the footings that a filter selects, with how many of them stand how (on the first page). */
 export async function listFootings(context: Context, given: ListFootingsInput): Promise<FootingList> {
@@ -29,11 +30,18 @@ export async function listFootings(context: Context, given: ListFootingsInput): 
     const order = key
       ? sql`${key} ${direction}, f.mark collate natural_order, f.id`
       : sql`f.mark collate natural_order ${direction}, f.id ${direction}`;
-    const { rows } = await tx.execute<{ id: FootingId; mark: string; sortKey: unknown }>(sql`
-      select f.id, f.mark, ${key ?? sql`null`} as "sortKey"
-      from ${footingSources}
-      where f.project_id = ${context.projectId} and ${matching} and ${beyond}
-      order by ${order} limit ${limit + 1}`);
+    const walked =
+      !key && (filter.standing === "affected" || filter.standing === "current")
+        ? await walkByMark(tx, context, { filter, standing: filter.standing, beyond, order, need: limit + 1 })
+        : null;
+    const rows =
+      walked ??
+      (await pageAtOnce(tx, context, {
+        key,
+        where: sql`${matching} and ${beyond}`,
+        order,
+        limit: limit + 1,
+      }));
     const page = rows.slice(0, limit);
     const last = rows.length > limit ? page.at(-1) : undefined;
     return {
@@ -46,6 +54,21 @@ export async function listFootings(context: Context, given: ListFootingsInput): 
       counts: after === undefined && counts === "yes" ? await count(tx, context, matching) : null,
     };
   });
+}
+
+type PageRow = { id: FootingId; mark: string; sortKey: unknown };
+
+async function pageAtOnce(
+  tx: Transaction,
+  context: Context,
+  page: { key: SQL | null; where: SQL; order: SQL; limit: number },
+): Promise<PageRow[]> {
+  const { rows } = await tx.execute<PageRow>(sql`
+    select f.id, f.mark, ${page.key ?? sql`null`} as "sortKey"
+    from ${footingSources}
+    where f.project_id = ${context.projectId} and ${page.where}
+    order by ${page.order} limit ${page.limit}`);
+  return rows;
 }
 
 /** What each order goes by before the mark; a failing check without a figure is worse than any figure. */
