@@ -40,7 +40,7 @@ export function CheckResult({ check }: { check: CheckDetail }) {
     ],
     [
       "Factor against overturning",
-      factor(result.factorOverturning, snapshot.input.criteria.overturningFactor),
+      `${factor(result.factorOverturning, snapshot.input.criteria.overturningFactor)}${governedBy((c) => c.utilisationOverturning)}`,
     ],
     [
       "Factor against uplift",
