@@ -61,7 +61,7 @@ export function FootingTable({ projectId, items, total, chosen, onChosen, busy, 
       // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard.
       tabIndex={0}
       aria-label="Schedule of footings"
-      className="mt-3 max-h-[70vh] overflow-auto border border-rule bg-sheet"
+      className="mt-3 max-h-[62vh] overflow-auto border border-rule bg-sheet"
     >
       <table className="w-full border-separate border-spacing-0" aria-rowcount={total + 1} aria-busy={busy}>
         <thead className="sticky top-0 z-10 bg-sheet">
