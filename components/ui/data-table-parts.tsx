@@ -41,7 +41,7 @@ export function HeadCell<Row>({
   const figure = column.kind === "figure";
   const words = (
     <>
-      <span className="block">{column.head}</span>
+      <span className="block">{column.head}</span>{" "}
       {column.unit && <span className="block text-sm text-ink-2">{column.unit}</span>}
     </>
   );

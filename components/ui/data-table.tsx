@@ -88,8 +88,8 @@ export function DataTable<Row>(props: Props<Row>) {
   };
   const chooseAll = () => onChosen?.(new Set(ordered.map(rowKey)));
   const scrollTo = (index: number) => {
+    // A row that is in the page scrolls into view by itself when it gets the focus.
     if (few) virtual.scrollToIndex(index);
-    else body.current?.querySelector(`[data-row="${index}"]`)?.scrollIntoView({ block: "nearest" });
   };
   const walk = useRowKeys({
     body,
@@ -133,7 +133,7 @@ export function DataTable<Row>(props: Props<Row>) {
         aria-label={label}
         // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard.
         tabIndex={0}
-        className={`overflow-auto border border-rule bg-sheet print:max-h-none print:overflow-visible ${bounded}`}
+        className={`scroll-pt-14 overflow-auto border border-rule bg-sheet print:max-h-none print:overflow-visible ${bounded}`}
       >
         <table
           className={`w-full border-separate border-spacing-0 ${few ? "table-fixed min-w-max" : ""}`}

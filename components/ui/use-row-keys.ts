@@ -33,7 +33,7 @@ export function useRowKeys({ body, count, scrollTo, choose, chooseAll }: Given) 
       const target = inColumn ?? row?.querySelector<HTMLElement>(REACHABLE);
       if (target) {
         wanted.current = null;
-        target.focus({ preventScroll: true });
+        target.focus();
       } else if (tries > 0) {
         frame.current = requestAnimationFrame(() => focusWanted(tries - 1));
       }
