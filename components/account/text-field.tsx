@@ -21,7 +21,7 @@ export function TextField({ name, label, hint, problem, ...input }: Props) {
         name={name}
         aria-invalid={problem ? true : undefined}
         aria-describedby={problem || hint ? note : undefined}
-        className="mt-1 block w-full border border-rule bg-sheet px-2 py-1.5 text-ink aria-invalid:border-fails"
+        className="mt-1 block w-full border border-field bg-sheet px-2 py-1.5 text-ink aria-invalid:border-fails"
       />
       {problem ? (
         <p id={note} className="mt-1 text-sm text-fails-text">
