@@ -1,6 +1,6 @@
 "use client";
 
-import { type ReactNode, useEffect, useId, useRef } from "react";
+import { type ReactNode, useEffect, useId, useLayoutEffect, useRef } from "react";
 
 type Props = {
   title: string;
@@ -35,6 +35,13 @@ export function Dialog({ title, open, onClose, held = false, width = "normal", a
     if (open && !element.open) element.showModal();
     if (!open && element.open) element.close();
   }, [open]);
+  // A page may take an open dialog away whole. Closed while it is still in the page, it gives the focus back.
+  useLayoutEffect(() => {
+    const element = dialog.current;
+    return () => {
+      if (element?.open) element.close();
+    };
+  }, []);
 
   return (
     <dialog
@@ -44,8 +51,11 @@ export function Dialog({ title, open, onClose, held = false, width = "normal", a
         event.preventDefault();
         if (!held) onClose();
       }}
-      onClose={() => {
-        if (open) onClose();
+      onClose={(event) => {
+        if (!open || event.currentTarget.open) return;
+        // A browser lets nobody be locked in: pressed often enough, Escape closes what asked to stay.
+        if (held) event.currentTarget.showModal();
+        else onClose();
       }}
       className={`m-auto max-h-[92dvh] ${widths[width]} flex-col border border-frame bg-sheet text-ink backdrop:bg-[#1b2326]/50 open:flex`}
     >

@@ -10,12 +10,13 @@ export function QueryProvider({ children }: { children: ReactNode }) {
     () =>
       new QueryClient({
         defaultOptions: {
-          // A refusal does not change by asking again; a lost connection may, once.
-          queries: { staleTime: 10_000, retry: (failures, error) => failures < 1 && isUnreachable(error) },
+          // A refusal does not change by asking again; a lost connection or a server that is just starting may, once.
+          queries: { staleTime: 10_000, retry: (failures, error) => failures < 1 && isPassing(error) },
         },
       }),
   );
   return <QueryClientProvider client={queries}>{children}</QueryClientProvider>;
 }
 
-const isUnreachable = (error: unknown): boolean => error instanceof Problem && error.status === 0;
+const isPassing = (error: unknown): boolean =>
+  error instanceof Problem && (error.status === 0 || error.status === 503);
