@@ -75,16 +75,20 @@ export function DataTable<Row>(props: Props<Row>) {
       [...new Set([...defaultRangeExtractor(range), activeRef.current])].sort((one, other) => one - other),
   });
 
-  const last = useRef<number | null>(null);
-  const choose = (index: number, on: boolean, range: boolean) => {
-    if (!onChosen) return;
-    const from = range && last.current !== null ? last.current : index;
+  // The row chosen last is kept by its key: it may stand elsewhere once the rows are ordered anew.
+  const last = useRef<string | null>(null);
+  const chooseBetween = (from: number, to: number, on = true) => {
     const next = new Set(chosen);
-    for (const row of ordered.slice(Math.min(from, index), Math.max(from, index) + 1))
+    for (const row of ordered.slice(Math.min(from, to), Math.max(from, to) + 1))
       if (on) next.add(rowKey(row));
       else next.delete(rowKey(row));
-    last.current = index;
-    onChosen(next);
+    const end = ordered[to];
+    last.current = end === undefined ? null : rowKey(end);
+    onChosen?.(next);
+  };
+  const choose = (index: number, on: boolean, range: boolean) => {
+    const from = range ? ordered.findIndex((row) => rowKey(row) === last.current) : index;
+    chooseBetween(from < 0 ? index : from, index, on);
   };
   const chooseAll = () => onChosen?.(new Set(ordered.map(rowKey)));
   const scrollTo = (index: number) => {
@@ -95,7 +99,7 @@ export function DataTable<Row>(props: Props<Row>) {
     body,
     count: ordered.length,
     scrollTo,
-    ...(onChosen ? { choose, chooseAll } : {}),
+    ...(onChosen ? { choose: chooseBetween, chooseAll } : {}),
   });
   activeRef.current = walk.active;
 

@@ -6,8 +6,8 @@ type Given = {
   body: RefObject<HTMLElement | null>;
   count: number;
   scrollTo: (index: number) => void;
-  /** Chooses a row, or all between the last one and it. */
-  choose?: (index: number, on: boolean, range: boolean) => void;
+  /** Chooses the rows from one to another, both included. */
+  choose?: (from: number, to: number) => void;
   chooseAll?: () => void;
 };
 
@@ -51,7 +51,7 @@ export function useRowKeys({ body, count, scrollTo, choose, chooseAll }: Given) 
     const to = targetRow(event, from.index, count);
     if (to === null) return;
     event.preventDefault();
-    if (event.shiftKey && choose) choose(to, true, true);
+    if (event.shiftKey && choose) choose(from.index, to);
     setActive(to);
     scrollTo(to);
     wanted.current = { index: to, column: from.column };

@@ -130,6 +130,24 @@ describe("rows that can be chosen", () => {
     expect(chosen()).toBe("");
   });
 
+  it("takes the row it starts from and the rows passed when walked with Shift", () => {
+    render(<Schedule />);
+    box("F10").focus();
+    fireEvent.keyDown(box("F10"), { key: "ArrowDown", shiftKey: true });
+    expect(chosen()).toBe("F10 F2");
+    fireEvent.keyDown(box("F2"), { key: "ArrowDown", shiftKey: true });
+    expect(chosen()).toBe("F10 F2 F1");
+  });
+
+  it("reaches back to the footing chosen last, wherever a new order has put it", () => {
+    render(<Schedule />);
+    fireEvent.click(box("F10"));
+    press(/^Mark/);
+    expect(marks()).toEqual(["F1", "F2", "F10"]);
+    fireEvent.click(box("F2"), { shiftKey: true });
+    expect(chosen()).toBe("F10 F2");
+  });
+
   it("walks along the marks when the focus stands on a mark", () => {
     render(<Schedule />);
     screen.getByRole("link", { name: "F10" }).focus();
