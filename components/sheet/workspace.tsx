@@ -1,4 +1,5 @@
 import type { ReactNode } from "react";
+import { Toasts } from "@/components/ui/toast";
 import { IndexOfSheets } from "./index-of-sheets";
 import { TitleBlock, type TitleBlockFacts } from "./title-block";
 
@@ -15,6 +16,7 @@ export function Workspace({ projectId, facts, children }: Props) {
         To the sheet
       </a>
       <IndexOfSheets projectId={projectId} />
+      <Toasts />
       <div className="workspace-sheet flex min-w-0 flex-1 flex-col border-frame bg-sheet md:border-x md:border-t">
         <main id="sheet" tabIndex={-1} className="min-w-0 flex-1 outline-none">
           {children}

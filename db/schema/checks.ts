@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import {
   bigint,
   check,
@@ -11,7 +12,6 @@ import {
   unique,
   uuid,
 } from "drizzle-orm/pg-core";
-import { sql } from "drizzle-orm";
 import type {
   ChangeId,
   CheckId,
@@ -83,7 +83,10 @@ export const footingCheck = pgTable(
       columns: [t.projectId, t.zoneRevisionId],
       foreignColumns: [zoneRevision.projectId, zoneRevision.id],
     }),
-    foreignKey({ columns: [t.projectId, t.criteriaNumber], foreignColumns: [criteria.projectId, criteria.number] }),
+    foreignKey({
+      columns: [t.projectId, t.criteriaNumber],
+      foreignColumns: [criteria.projectId, criteria.number],
+    }),
     foreignKey({
       columns: [t.projectId, t.valueId, t.valueRevisionId],
       foreignColumns: [bearingValueRevision.projectId, bearingValueRevision.valueId, bearingValueRevision.id],
@@ -202,8 +205,14 @@ export const disposition = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.projectId, t.consequenceId, t.number] }),
-    foreignKey({ columns: [t.projectId, t.consequenceId], foreignColumns: [consequence.projectId, consequence.id] }),
-    foreignKey({ columns: [t.projectId, t.checkId], foreignColumns: [footingCheck.projectId, footingCheck.id] }),
+    foreignKey({
+      columns: [t.projectId, t.consequenceId],
+      foreignColumns: [consequence.projectId, consequence.id],
+    }),
+    foreignKey({
+      columns: [t.projectId, t.checkId],
+      foreignColumns: [footingCheck.projectId, footingCheck.id],
+    }),
   ],
 );
 

@@ -1,13 +1,4 @@
-import {
-  bigint,
-  foreignKey,
-  index,
-  integer,
-  pgTable,
-  primaryKey,
-  text,
-  unique,
-} from "drizzle-orm/pg-core";
+import { bigint, foreignKey, index, integer, pgTable, primaryKey, text, unique } from "drizzle-orm/pg-core";
 import type { DocumentId, DocumentRevisionId, PersonId, UploadId } from "@/lib/contracts/ids";
 import { id, moment, projectKey } from "./columns";
 import { person } from "./people";
@@ -27,7 +18,10 @@ export const document = pgTable(
     revision: integer("revision").notNull().default(1),
     createdAt: moment("created_at").notNull().defaultNow(),
   },
-  (t) => [primaryKey({ columns: [t.projectId, t.id] }), unique("document_reference").on(t.projectId, t.reference)],
+  (t) => [
+    primaryKey({ columns: [t.projectId, t.id] }),
+    unique("document_reference").on(t.projectId, t.reference),
+  ],
 );
 
 /** One stored file of a document. Never changes once written. */
@@ -76,7 +70,10 @@ export const upload = pgTable(
     mediaType: text("media_type").notNull(),
     size_bytes: bigint("size_bytes", { mode: "number" }).notNull(),
     sha256: text("sha256"),
-    state: text("state").$type<"waiting" | "finished" | "refused" | "cancelled">().notNull().default("waiting"),
+    state: text("state")
+      .$type<"waiting" | "finished" | "refused" | "cancelled">()
+      .notNull()
+      .default("waiting"),
     refusal: text("refusal"),
     startedBy: id<PersonId>("started_by")
       .notNull()

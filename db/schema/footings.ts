@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import {
   check,
   foreignKey,
@@ -9,7 +10,6 @@ import {
   text,
   unique,
 } from "drizzle-orm/pg-core";
-import { sql } from "drizzle-orm";
 import type {
   CheckId,
   DocumentRevisionId,
@@ -48,7 +48,10 @@ export const footing = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.id] }),
     unique("footing_mark").on(t.projectId, t.mark),
-    foreignKey({ columns: [t.projectId, t.valueId], foreignColumns: [bearingValue.projectId, bearingValue.id] }),
+    foreignKey({
+      columns: [t.projectId, t.valueId],
+      foreignColumns: [bearingValue.projectId, bearingValue.id],
+    }),
     index("footing_value").on(t.projectId, t.valueId),
   ],
 );
@@ -138,7 +141,10 @@ export const footingLink = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.footingId, t.number] }),
     foreignKey({ columns: [t.projectId, t.footingId], foreignColumns: [footing.projectId, footing.id] }),
-    foreignKey({ columns: [t.projectId, t.valueId], foreignColumns: [bearingValue.projectId, bearingValue.id] }),
+    foreignKey({
+      columns: [t.projectId, t.valueId],
+      foreignColumns: [bearingValue.projectId, bearingValue.id],
+    }),
   ],
 );
 

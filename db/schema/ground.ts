@@ -108,7 +108,10 @@ export const holeRevision = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.id] }),
     foreignKey({ columns: [t.projectId, t.holeId], foreignColumns: [hole.projectId, hole.id] }),
-    foreignKey({ columns: [t.projectId, t.dataIssueId], foreignColumns: [dataIssue.projectId, dataIssue.id] }),
+    foreignKey({
+      columns: [t.projectId, t.dataIssueId],
+      foreignColumns: [dataIssue.projectId, dataIssue.id],
+    }),
     foreignKey({
       columns: [t.projectId, t.sourceRevisionId],
       foreignColumns: [documentRevision.projectId, documentRevision.id],
@@ -178,7 +181,10 @@ export const stratumAssignment = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.stratumId] }),
     foreignKey({ columns: [t.projectId, t.stratumId], foreignColumns: [stratum.projectId, stratum.id] }),
-    foreignKey({ columns: [t.projectId, t.groundUnitId], foreignColumns: [groundUnit.projectId, groundUnit.id] }),
+    foreignKey({
+      columns: [t.projectId, t.groundUnitId],
+      foreignColumns: [groundUnit.projectId, groundUnit.id],
+    }),
     index("stratum_assignment_unit").on(t.projectId, t.groundUnitId),
   ],
 );
@@ -224,7 +230,10 @@ export const waterStrike = pgTable(
     at: text("at").notNull().default(""),
     casing_m: quantity("casing_m"),
     sealed_m: quantity("sealed_m"),
-    rises: jsonb("rises").$type<{ minutes: number; depth_m: number | null; text: string }[]>().notNull().default([]),
+    rises: jsonb("rises")
+      .$type<{ minutes: number; depth_m: number | null; text: string }[]>()
+      .notNull()
+      .default([]),
     remarks: text("remarks").notNull().default(""),
     sourceLine: integer("source_line"),
   },

@@ -34,7 +34,10 @@ export const inspection = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.id] }),
     foreignKey({ columns: [t.projectId, t.footingId], foreignColumns: [footing.projectId, footing.id] }),
-    foreignKey({ columns: [t.projectId, t.groundUnitId], foreignColumns: [groundUnit.projectId, groundUnit.id] }),
+    foreignKey({
+      columns: [t.projectId, t.groundUnitId],
+      foreignColumns: [groundUnit.projectId, groundUnit.id],
+    }),
     index("inspection_footing").on(t.projectId, t.footingId, t.seq),
   ],
 );

@@ -43,7 +43,10 @@ export const signInAttempt = pgTable(
     succeeded: boolean("succeeded").notNull(),
     at: moment("at").notNull().defaultNow(),
   },
-  (t) => [index("sign_in_attempt_account").on(t.account, t.at), index("sign_in_attempt_address").on(t.address, t.at)],
+  (t) => [
+    index("sign_in_attempt_account").on(t.account, t.at),
+    index("sign_in_attempt_address").on(t.address, t.at),
+  ],
 );
 
 /** A single-use link sent by mail: an invitation to a project or a password reset. Only its hash is stored. */

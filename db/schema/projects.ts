@@ -1,13 +1,4 @@
-import {
-  boolean,
-  integer,
-  jsonb,
-  pgTable,
-  primaryKey,
-  text,
-  unique,
-  uuid,
-} from "drizzle-orm/pg-core";
+import { boolean, integer, jsonb, pgTable, primaryKey, text, unique, uuid } from "drizzle-orm/pg-core";
 import type { PersonId, ProjectId } from "@/lib/contracts/ids";
 import { id, moment, projectKey, quantity } from "./columns";
 import { person } from "./people";
@@ -101,6 +92,8 @@ export const apiToken = pgTable(
     lastUsedAt: moment("last_used_at"),
     revokedAt: moment("revoked_at"),
   },
-  (t) => [primaryKey({ columns: [t.projectId, t.id] }), unique("api_token_hash").on(t.projectId, t.tokenHash)],
+  (t) => [
+    primaryKey({ columns: [t.projectId, t.id] }),
+    unique("api_token_hash").on(t.projectId, t.tokenHash),
+  ],
 );
-

@@ -21,7 +21,10 @@ export const auditEvent = pgTable(
     previousHash: text("previous_hash").notNull(),
     hash: text("hash").notNull(),
   },
-  (t) => [primaryKey({ columns: [t.projectId, t.seq] }), index("audit_event_subject").on(t.projectId, t.subject)],
+  (t) => [
+    primaryKey({ columns: [t.projectId, t.seq] }),
+    index("audit_event_subject").on(t.projectId, t.subject),
+  ],
 );
 
 /** A message that must leave: written with what it tells, sent later by the relay, at least once under one Message-ID. */
@@ -60,4 +63,3 @@ export const idempotentAnswer = pgTable(
   },
   (t) => [primaryKey({ columns: [t.projectId, t.key] })],
 );
-

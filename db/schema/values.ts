@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import {
   check,
   foreignKey,
@@ -9,7 +10,6 @@ import {
   text,
   unique,
 } from "drizzle-orm/pg-core";
-import { sql } from "drizzle-orm";
 import type {
   DocumentRevisionId,
   GroundUnitId,
@@ -64,7 +64,10 @@ export const bearingValueDraft = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.projectId, t.valueId] }),
-    foreignKey({ columns: [t.projectId, t.valueId], foreignColumns: [bearingValue.projectId, bearingValue.id] }),
+    foreignKey({
+      columns: [t.projectId, t.valueId],
+      foreignColumns: [bearingValue.projectId, bearingValue.id],
+    }),
   ],
 );
 
@@ -132,7 +135,10 @@ export const bearingValueRevision = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.projectId, t.id] }),
-    foreignKey({ columns: [t.projectId, t.valueId], foreignColumns: [bearingValue.projectId, bearingValue.id] }),
+    foreignKey({
+      columns: [t.projectId, t.valueId],
+      foreignColumns: [bearingValue.projectId, bearingValue.id],
+    }),
     unique("bearing_value_revision_number").on(t.projectId, t.valueId, t.number),
     unique("bearing_value_revision_of_value").on(t.projectId, t.valueId, t.id),
     // A check copies kind and pressure through these keys, so it can hold no number that the revision does not.

@@ -29,7 +29,10 @@ export const zoneGroundUnit = pgTable(
   (t) => [
     primaryKey({ columns: [t.projectId, t.zoneId, t.groundUnitId] }),
     foreignKey({ columns: [t.projectId, t.zoneId], foreignColumns: [zone.projectId, zone.id] }),
-    foreignKey({ columns: [t.projectId, t.groundUnitId], foreignColumns: [groundUnit.projectId, groundUnit.id] }),
+    foreignKey({
+      columns: [t.projectId, t.groundUnitId],
+      foreignColumns: [groundUnit.projectId, groundUnit.id],
+    }),
   ],
 );
 

@@ -64,7 +64,11 @@ export async function inProject<Result>(
 }
 
 /** Sets project, person and engine for the rest of this transaction; row security reads them. */
-export async function enter(tx: Transaction, projectId: ProjectId | "", personId: PersonId | ""): Promise<void> {
+export async function enter(
+  tx: Transaction,
+  projectId: ProjectId | "",
+  personId: PersonId | "",
+): Promise<void> {
   await tx.execute(sql`select set_config('app.project_id', ${projectId}, true),
     set_config('app.person_id', ${personId}, true), set_config('app.engine', ${ENGINE_VERSION}, true)`);
 }
@@ -120,7 +124,8 @@ async function answerIfRepeated(tx: Transaction, context: Context): Promise<void
     .from(t.idempotentAnswer)
     .where(sql`project_id = ${context.projectId} and key = ${keyed.key}`);
   if (!before) return;
-  if (before.personId !== context.person.id) throw new Forbidden("This key belongs to another person's request.");
+  if (before.personId !== context.person.id)
+    throw new Forbidden("This key belongs to another person's request.");
   if (before.bodyHash !== keyed.bodyHash || before.route !== keyed.route)
     throw new Invalid("This key was used for another request.", {}, 422);
   throw new AnsweredBefore(before.status, before.body);
@@ -141,4 +146,5 @@ async function keepAnswer(tx: Transaction, context: Context, result: unknown): P
 }
 
 /** SHA-256 of a text or bytes, as 64 hexadecimal digits. */
-export const sha256 = (content: string | Uint8Array): string => createHash("sha256").update(content).digest("hex");
+export const sha256 = (content: string | Uint8Array): string =>
+  createHash("sha256").update(content).digest("hex");

@@ -23,11 +23,9 @@ export async function plantDemo(env) {
   // Planting needs no address that anybody opens; the letters it queues name the usual one where none is set.
   const origin = env.APP_ORIGIN ?? env.NEXTAUTH_URL ?? process.env.APP_ORIGIN ?? "http://127.0.0.1:3000";
   const whole = { APP_ORIGIN: origin, NEXTAUTH_URL: origin, ...process.env, ...quiet, ...env };
-  await run([process.execPath, tsx, seed], "", { env: whole }).catch(
-    (error) => {
-      throw new Error(`The demonstration project could not be set up:\n${error.message}`);
-    },
-  );
+  await run([process.execPath, tsx, seed], "", { env: whole }).catch((error) => {
+    throw new Error(`The demonstration project could not be set up:\n${error.message}`);
+  });
   return "planted";
 }
 
