@@ -1,4 +1,4 @@
-import type { DocumentKind } from "@/lib/contracts/documents";
+import type { DocumentKind } from "@/lib/contracts/document-words";
 import type { Page } from "./pdf";
 
 export type SeedDocument = {

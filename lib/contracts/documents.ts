@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { type DocumentKind, documentKinds, statusMeanings } from "./document-words";
 import type { DocumentId, DocumentRevisionId, UploadId, ValueRevisionId } from "./ids";
 import { plainText } from "./plain-text";
 
@@ -7,41 +8,6 @@ const uuid = <Brand extends string>() =>
 
 /** Largest file that one request may carry (5 GiB is the limit of one PUT in S3). */
 export const LARGEST_FILE_BYTES = 2 * 1024 ** 3;
-
-export const documentKinds = [
-  "desk study",
-  "factual report",
-  "ground investigation report",
-  "geotechnical design report",
-  "addendum",
-  "letter",
-  "formation record",
-  "test certificate",
-  "ground data",
-  "drawing",
-  "loads",
-  "other",
-] as const;
-export type DocumentKind = (typeof documentKinds)[number];
-
-/** Status codes in the ISO 19650 manner, with what each means; S6 and S7 are accepted from older sets. */
-export const statusMeanings: Record<string, string> = {
-  S0: "work in progress",
-  S1: "shared for coordination",
-  S2: "shared for information",
-  S3: "shared for review and comment",
-  S4: "shared for review and authorisation",
-  S5: "shared for review and acceptance",
-  S6: "withdrawn from use in 2021; accepted from older sets",
-  S7: "withdrawn from use in 2021; accepted from older sets",
-  A1: "authorised and accepted, stage 1",
-  A2: "authorised and accepted, stage 2",
-  A3: "authorised and accepted, stage 3",
-  A4: "authorised and accepted, stage 4",
-  A5: "authorised and accepted, stage 5",
-  A6: "authorised and accepted, stage 6",
-  A7: "authorised and accepted, stage 7",
-};
 
 const filled = (label: string, limit: number) =>
   plainText(limit)
