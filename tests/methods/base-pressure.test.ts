@@ -40,18 +40,22 @@ function integrate(load: BaseLoad): { vertical: number; momentB: number; momentL
   const answer = basePressure.compute(load);
   const { contactPolygon_m: polygon, neutralAxis, maxPressure_kPa, cornerPressures_kPa } = answer;
   if (maxPressure_kPa === null || cornerPressures_kPa === null) throw new Error("No equilibrium.");
+  // The plane: through three corners where these are pressed, else from its peak down to the line where it ends.
+  const [signB, signL] = [Math.sign(load.momentB_kNm) || 1, Math.sign(load.momentL_kNm) || 1];
+  const [pp, mp, mm, pm] = cornerPressures_kPa;
+  const acrossB = signL > 0 ? (signB > 0 ? mp : pp) : signB > 0 ? mm : pm;
+  const acrossL = signB > 0 ? (signL > 0 ? pm : pp) : signL > 0 ? mm : mp;
+  const loaded: Point = [(signB * load.breadth_m) / 2, (signL * load.length_m) / 2];
   let at: (p: Point) => number;
-  if (neutralAxis === null) {
-    const [pp, mp, mm] = cornerPressures_kPa;
-    at = ([x, y]) => (pp + mm) / 2 + ((pp - mp) * x) / load.breadth_m + ((mp - mm) * y) / load.length_m;
-  } else {
+  if ((acrossB > 0 && acrossL > 0) || neutralAxis === null)
+    at = ([x, y]) =>
+      maxPressure_kPa -
+      ((maxPressure_kPa - acrossB) * Math.abs(loaded[0] - x)) / load.breadth_m -
+      ((maxPressure_kPa - acrossL) * Math.abs(loaded[1] - y)) / load.length_m;
+  else {
     const { from_m, to_m } = neutralAxis;
     const from = ([x, y]: Point) =>
       (to_m[0] - from_m[0]) * (y - from_m[1]) - (to_m[1] - from_m[1]) * (x - from_m[0]);
-    const loaded: Point = [
-      (Math.sign(load.momentB_kNm) || 1) * (load.breadth_m / 2),
-      (Math.sign(load.momentL_kNm) || 1) * (load.length_m / 2),
-    ];
     at = (p) => (maxPressure_kPa * from(p)) / from(loaded);
   }
   let [sum, momentB, momentL, area] = [0, 0, 0, 0];
