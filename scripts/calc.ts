@@ -4,8 +4,9 @@ import { allMethods, runMethod } from "@/lib/check/all-methods";
 
 /**
  * `npm run -s calc`: one JSON object a line on standard input, `{"method": "<id>", "inputs": {…}}`, one line each on
- * standard output, `{"outputs": {…}}` or `{"error": {…}}`, with `findings` beside the outputs where a limit of the method is not kept. A bad
- * line is answered, never fatal. `--list` prints the ids and fields; `--lines` adds the steps with their numbers.
+ * standard output, `{"outputs": {…}}` or `{"error": {…}}`, with `findings` beside the outputs where a limit of the
+ * method is not kept. A bad line is answered, never fatal. `--list` prints the ids and fields; `--lines` adds the steps
+ * with their numbers.
  */
 function answer(text: string): unknown {
   let asked: unknown;
@@ -41,16 +42,26 @@ function answer(text: string): unknown {
   }
 }
 
+type Field = { label?: string; unit?: string; default?: unknown; anyOf?: Field[] };
+
+/** Each field with label, unit and, for what may be left out, its default. */
+function fieldsOf(schema: z.ZodType, io: "input" | "output"): Record<string, object> {
+  const { properties = {} } = z.toJSONSchema(schema, { io, unrepresentable: "any" }) as {
+    properties?: Record<string, Field>;
+  };
+  return Object.fromEntries(
+    Object.entries(properties).map(([name, field]) => {
+      const { label, unit } = [field, ...(field.anyOf ?? [])].find((one) => one.label !== undefined) ?? {};
+      return [name, { label, unit, ...("default" in field ? { default: field.default } : {}) }];
+    }),
+  );
+}
+
 if (process.argv.includes("--list")) {
-  for (const { id, version, title, inputs, outputs } of allMethods) {
-    const fields = (schema: z.ZodType, io: "input" | "output") =>
-      Object.keys(
-        (z.toJSONSchema(schema, { io, unrepresentable: "any" }) as { properties?: object }).properties ?? {},
-      );
+  for (const { id, version, title, inputs, outputs } of allMethods)
     process.stdout.write(
-      `${JSON.stringify({ id, version, title, inputs: fields(inputs, "input"), outputs: fields(outputs, "output") })}\n`,
+      `${JSON.stringify({ id, version, title, inputs: fieldsOf(inputs, "input"), outputs: fieldsOf(outputs, "output") })}\n`,
     );
-  }
 } else {
   for await (const text of createInterface({ input: process.stdin, crlfDelay: Number.POSITIVE_INFINITY }))
     if (text.trim() !== "") process.stdout.write(`${JSON.stringify(answer(text))}\n`);
