@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { type Soil, soils } from "./ground-words";
 import type { DocumentRevisionId, GroundUnitId, HoleId, HoleRevisionId, StratumId, UploadId } from "./ids";
 import { plainText } from "./plain-text";
 
@@ -13,52 +14,6 @@ const metres = (label: string, min: number, max: number) =>
     .number(`${label} is a finite number of metres.`)
     .min(min, `${label} is too small.`)
     .max(max, `${label} is too large.`);
-
-/** Kinds of soil and rock that choose a hatch. */
-export const soils = [
-  "made-ground",
-  "topsoil",
-  "clay",
-  "silt",
-  "sand",
-  "gravel",
-  "peat",
-  "cobbles",
-  "mudstone",
-  "siltstone",
-  "sandstone",
-  "limestone",
-  "chalk",
-  "coal",
-  "breccia",
-  "conglomerate",
-  "igneous",
-  "metamorphic",
-  "rock",
-  "concrete",
-  "void",
-  "unknown",
-] as const;
-export type Soil = (typeof soils)[number];
-
-/** Kinds of exploratory hole as the AGS data format codes them, with the words for each. */
-export const holeKinds: Record<string, string> = {
-  CP: "Cable percussion borehole",
-  RC: "Rotary cored borehole",
-  RO: "Rotary open hole",
-  "CP+RC": "Cable percussion with rotary follow-on",
-  SNC: "Sonic borehole",
-  WS: "Window sampler",
-  WLS: "Windowless sampler",
-  DS: "Dynamic sampler",
-  HA: "Hand auger",
-  TP: "Trial pit or trench",
-  IP: "Inspection pit",
-  CPT: "Cone penetration test",
-  DP: "Dynamic probe",
-  DCP: "Dynamic cone penetrometer",
-};
-export const holeStatuses = ["", "PROPOSED", "DRAFT", "PRELIM", "FINAL", "HISTORIC"] as const;
 
 export const unitFields = {
   code: filled("Code", 20),
