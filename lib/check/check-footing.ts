@@ -44,7 +44,7 @@ type Fixed = {
 };
 
 /**
- * One footing, its combinations, one value, the criteria (definitions: DEVELOPERS.md, "The check"). Pure and
+ * One footing, its combinations, one value, the criteria (definitions: the formulas beside this file). Pure and
  * deterministic. Comparisons are made on unrounded figures; a figure that has no bound is null and never passes. The
  * input has come through `footingCheckInput` or the register, whose columns hold the same limits; a figure that is none
  * all the same is refused by an `UnusableInput`, never checked.

@@ -4,6 +4,7 @@ import { checkFooting } from "@/lib/check/check-footing";
 import { explainCheck } from "@/lib/check/explain-check";
 import { footingCheckInput } from "@/lib/check/input";
 import { footingCheck } from "@/lib/check/method";
+import { bearingResistanceOf } from "@/lib/methods/bearing-resistance/index";
 import { pad } from "./check-arbitraries";
 
 const codes = (input: Parameters<typeof checkFooting>[0]) =>
@@ -170,6 +171,27 @@ describe("stability", () => {
     expect(result).toMatchObject({ governingCombination: "least", governedBy: "sliding", verdict: "fails" });
   });
 
+  it("is governed by the first of combinations that are alike", () => {
+    const result = checkFooting(pad({ loads: [{ name: "one" }, { name: "same" }, { name: "again" }] }));
+    expect(result.governingCombination).toBe("one");
+  });
+
+  it("holds overturning to the factor that the project asks for", () => {
+    const loads = [{ vertical_kN: 516, momentB_kNm: 300, duration: "transient" as const }];
+    const value = { netAllowable_kPa: 1000 };
+    expect(codes(pad({ loads, value, criteria: { overturningFactor: 2 } }))).not.toContain(
+      "fails: overturning",
+    );
+    const asked = checkFooting(pad({ loads, value, criteria: { overturningFactor: 2.5 } }));
+    expect(asked).toMatchObject({ verdict: "fails", governedBy: "overturning", utilisation: 1.25 });
+    expect(asked.findings[0]?.message).toBe("Overturning: factor 2.00 where 2.50 is asked.");
+  });
+
+  it("has no backfill on a pad that is thicker than it is deep, and none taken off", () => {
+    const result = checkFooting(pad({ footing: { thickness_m: 1.5 } }));
+    expect(result).toMatchObject({ padWeight_kN: 144, backfillWeight_kN: 0, depth_m: 1 });
+  });
+
   it("slides on the effective load: water takes its share", () => {
     const loads = [{ horizontalB_kN: 100 }];
     const dry = checkFooting(pad({ loads })).factorSliding as number;
@@ -255,6 +277,52 @@ describe("a value computed from soil parameters", () => {
     const ultimate = (result: typeof one) => result.combinations[0]?.ultimate_kPa as number;
     expect(ultimate(turned)).toBeCloseTo(ultimate(one), 9);
     expect(Math.abs(ultimate(other) / ultimate(one) - 1)).toBeGreaterThan(0.01);
+  });
+
+  it("is what the method bearing-resistance gives: effective sides, effective overburden, submerged weight", () => {
+    const sand = {
+      ...clay,
+      drainage: "drained",
+      frictionAngle_deg: 32,
+      cohesion_kPa: 2,
+      unitWeightBelow_kNm3: 20,
+    };
+    const input = pad({
+      footing: { breadth_m: 2, length_m: 3 },
+      loads: [{ vertical_kN: 600, momentB_kNm: 40, horizontalB_kN: 50, horizontalL_kN: 20 }],
+      value: { ...value, parameters: sand, groundwaterLevel_m: 10.4 },
+    });
+    const [c] = checkFooting(input).combinations;
+    if (!c) throw new Error("No combination.");
+    expect([c.effectiveBreadth_m, c.effectiveLength_m].every((side) => side > 0)).toBe(true);
+    const { ultimate_kPa } = bearingResistanceOf({
+      theory: "en1997",
+      drainage: "drained",
+      effectiveBreadth_m: c.effectiveBreadth_m,
+      effectiveLength_m: c.effectiveLength_m,
+      depth_m: 1,
+      cohesion_kPa: 2,
+      frictionAngle_deg: 32,
+      surcharge_kPa: 18 - 9.81 * 0.4,
+      unitWeightBelow_kNm3: 20,
+      vertical_kN: c.baseVertical_kN,
+      horizontal_kN: Math.hypot(50, 20),
+      horizontalAlong: (Math.atan2(50, 20) * 180) / Math.PI,
+      baseTilt_deg: 0,
+      waterDepth_m: -0.4,
+    });
+    expect(c.ultimate_kPa).toBeCloseTo(ultimate_kPa, 9);
+    expect(c.netAllowable_kPa).toBeCloseTo((ultimate_kPa - (18 - 9.81 * 0.4)) / 3, 9);
+  });
+
+  it("takes the total overburden off an undrained gross value", () => {
+    const gross = {
+      ...value,
+      parameters: { ...clay, convention: "gross-over-factor" },
+      groundwaterLevel_m: 11,
+    };
+    const [c] = checkFooting(pad({ value: gross })).combinations;
+    expect(c?.netAllowable_kPa).toBeCloseTo(((Math.PI + 2) * 60 + 18) / 3 - 18, 9);
   });
 
   it("comes to the same undrained net pressure whether water stands at the surface or nowhere", () => {

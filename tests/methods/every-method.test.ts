@@ -131,6 +131,13 @@ describe("the list of methods", () => {
     for (const id of ids) expect(id).toMatch(/^[a-z]+(-[a-z]+)*$/);
   });
 
+  it("gives out no figure beyond what numbers can hold", () => {
+    const given = { soil: "clay", plateBreadth_m: 1e-200, plateSettlement_mm: 5, footingBreadth_m: 1e200 };
+    expect(runMethod("plate-load", given)).toMatchObject({
+      error: { message: expect.stringContaining("footingSettlement_mm has no finite value") },
+    });
+  });
+
   it("answers an unknown id with the ids that there are", () => {
     expect(runMethod("base-presure", {})).toMatchObject({ error: { code: "unknown-method" } });
     expect(runMethod("toString", {})).toMatchObject({ error: { code: "unknown-method" } });

@@ -499,6 +499,67 @@ export const bearingResistanceCases: ReferenceCase[] = [
       },
     ],
   ),
+  ...casesOf(
+    {
+      method: "bearing-resistance",
+      citation:
+        "A. S. Vesić 1973 with Hansen's depth factors: dq = 1 + 2 tan φ (1 − sin φ)² D/B, atan(D/B) beyond one; m = (2 + B/L)/(1 + B/L); by hand",
+      status: "computed independently",
+      tolerance: { rel: 1e-5 },
+    },
+    [
+      {
+        id: "resistance-vesic-depth",
+        why: "deepens by 1.2887 at one breadth and 30°",
+        inputs: {
+          theory: "vesic",
+          drainage: "drained",
+          effectiveBreadth_m: 1,
+          effectiveLength_m: 2,
+          depth_m: 1,
+          cohesion_kPa: 0,
+          frictionAngle_deg: 30,
+          surcharge_kPa: 18,
+          unitWeightBelow_kNm3: 18,
+        },
+        expected: { dq: 1.288675, dGamma: 1 },
+      },
+      {
+        id: "resistance-hansen-deep",
+        why: "deepens by the arctangent at two breadths, not by twice as much",
+        inputs: {
+          theory: "hansen",
+          drainage: "drained",
+          effectiveBreadth_m: 1,
+          effectiveLength_m: 2,
+          depth_m: 2,
+          cohesion_kPa: 0,
+          frictionAngle_deg: 30,
+          surcharge_kPa: 36,
+          unitWeightBelow_kNm3: 18,
+        },
+        expected: { dq: 1 + 0.288675 * 1.107149 },
+      },
+      {
+        id: "resistance-vesic-undrained-inclined",
+        why: "loses 6.2 % to 60 kN along the breadth of 2 m by 3 m on clay of 50 kPa",
+        inputs: {
+          theory: "vesic",
+          drainage: "undrained",
+          effectiveBreadth_m: 2,
+          effectiveLength_m: 3,
+          depth_m: 0,
+          cohesion_kPa: 50,
+          frictionAngle_deg: 0,
+          surcharge_kPa: 0,
+          unitWeightBelow_kNm3: 18,
+          vertical_kN: 400,
+          horizontal_kN: 60,
+        },
+        expected: { ic: 1 - (1.6 * 60) / (300 * 5.141593) },
+      },
+    ],
+  ),
 ];
 
 export const allowableBearingCases: ReferenceCase[] = casesOf(
