@@ -1,8 +1,9 @@
 import { describe, expect, it } from "vitest";
 import { runMethod } from "@/lib/check/all-methods";
+import type { Mapped, Reading } from "./mapping";
 import { atPath } from "./reference-case";
 import { type SharedCase, sharedCases, si } from "./shared-cases";
-import { type Mapped, mappings, type Reading } from "./shared-mappings";
+import { mappings } from "./shared-mappings";
 
 const shared = [...sharedCases("base.json"), ...sharedCases("bearing.json")];
 const present = shared.length > 0;
