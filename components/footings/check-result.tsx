@@ -3,6 +3,7 @@
 import { useState } from "react";
 import { PressureFigure } from "@/components/figures/pressure-figure";
 import { Sign } from "@/components/figures/sign";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import type { CombinationResult, Severity } from "@/lib/check/input";
 import type { CheckDetail } from "@/lib/contracts/checks";
 import { CombinationsTable, governs } from "./combinations-table";
@@ -89,7 +90,7 @@ export function CheckResult({ check }: { check: CheckDetail }) {
       {combination && (
         <>
           <h3 className="mt-5 font-semibold">Base pressure: {combination.name}</h3>
-          <div className="mt-2 max-w-full overflow-x-auto">
+          <ScrollAcross label="Pressure under the base" className="mt-2 max-w-full">
             <PressureFigure
               soil={check.value.soil}
               given={{
@@ -110,7 +111,7 @@ export function CheckResult({ check }: { check: CheckDetail }) {
                 contactPolygon_m: contactPolygons_m[shown] ?? [],
               }}
             />
-          </div>
+          </ScrollAcross>
         </>
       )}
       <h3 className="mt-5 font-semibold">Combinations</h3>

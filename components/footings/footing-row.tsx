@@ -39,6 +39,7 @@ export function FootingRow({ projectId, item, index, chosen, onChoose }: Props) 
       <td className="pr-2 pl-1">
         <input
           type="checkbox"
+          className="m-1 size-4"
           checked={chosen}
           aria-label={`Choose ${item.mark}`}
           onChange={(event) =>

@@ -69,6 +69,7 @@ export function FootingTable({ projectId, items, total, chosen, onChosen, busy, 
             <th scope="col" className="border-b border-rule pr-2 pl-1 text-left">
               <input
                 type="checkbox"
+                className="m-1 size-4"
                 aria-label="Choose all that are shown"
                 checked={allShown}
                 onChange={(event) =>

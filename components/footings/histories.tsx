@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { Sign } from "@/components/figures/sign";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import { loadBasisTitles, stageTitles } from "@/lib/contracts/footing-words";
 import type { FootingDetail } from "@/lib/contracts/footings";
 import { fixed, momentShown, utilisationShown, whole } from "./shown";
@@ -150,7 +151,7 @@ function Table({
   children: React.ReactNode[];
 }) {
   return (
-    <div className="mt-4 overflow-x-auto">
+    <ScrollAcross label="History" className="mt-4">
       <table>
         <caption className="text-left font-semibold">{caption}</caption>
         {children.length > 0 ? (
@@ -174,6 +175,6 @@ function Table({
           )}
         </tbody>
       </table>
-    </div>
+    </ScrollAcross>
   );
 }

@@ -3,6 +3,7 @@
 import { type FormEvent, useRef, useState } from "react";
 import { TextField } from "@/components/account/text-field";
 import { Notice } from "@/components/ui/notice";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import type { Refused } from "@/lib/client/send";
 import { useFootingChange } from "@/lib/client/use-footings";
 import { durations, loadBases, loadBasisTitles } from "@/lib/contracts/footing-words";
@@ -126,7 +127,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
           problem={refused?.fields.source}
         />
       </div>
-      <div className="mt-4 overflow-x-auto">
+      <ScrollAcross label="Load combinations" className="mt-4">
         <table>
           <caption className="text-left text-ink-2">
             N down is positive. A moment along B tips the pad towards +B; a horizontal load adds to it through
@@ -204,7 +205,7 @@ export function LoadsForm({ projectId, footingId, revision, loads }: Props) {
             })}
           </tbody>
         </table>
-      </div>
+      </ScrollAcross>
       <button type="button" className="mt-1 underline" onClick={add}>
         Add a combination
       </button>

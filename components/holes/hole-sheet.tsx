@@ -8,6 +8,7 @@ import { ButtonLink } from "@/components/ui/button";
 import { DefinitionList } from "@/components/ui/definition-list";
 import { ErrorNote } from "@/components/ui/error-note";
 import { PageHead } from "@/components/ui/page-head";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import { fetchJson, Problem } from "@/lib/client/fetch-json";
 import { useHole, useUnits } from "@/lib/client/use-holes";
 import type { HolePage, SptRow, StratumRow, UnitRow } from "@/lib/contracts/ground";
@@ -84,7 +85,7 @@ export function HoleSheet({ projectId, initial, units, mayWrite }: Props) {
         ]}
       />
       {hole.remarks && <p className="mt-2 max-w-prose">{hole.remarks}</p>}
-      <div className="mt-6 overflow-x-auto">
+      <ScrollAcross label="Strip log" className="mt-6">
         <StripLog
           hole={{
             name: hole.name,
@@ -98,7 +99,7 @@ export function HoleSheet({ projectId, initial, units, mayWrite }: Props) {
             strikes: hole.strikeRows,
           }}
         />
-      </div>
+      </ScrollAcross>
       <StrataTable
         projectId={projectId}
         strata={hole.strataRows}
@@ -168,7 +169,7 @@ function StrataTable(props: {
     <section className="mt-8">
       <h2 className="text-lg">Strata</h2>
       {problem && <ErrorNote problem={problem} />}
-      <div className="overflow-x-auto">
+      <ScrollAcross label="Strata">
         <table className="w-full">
           <thead>
             <tr className="border-b border-rule text-left">
@@ -209,7 +210,7 @@ function StrataTable(props: {
             ))}
           </tbody>
         </table>
-      </div>
+      </ScrollAcross>
     </section>
   );
 }

@@ -1,4 +1,5 @@
 import Link from "next/link";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import type { ConsequenceItem } from "@/lib/contracts/changes";
 import { OutcomeSign } from "./outcome-sign";
 
@@ -34,7 +35,7 @@ export function ConsequenceTable({ items, projectId, busy, chosen, onChoose }: P
   ];
   const right = new Set(["Utilisation before", "after", "Required (kPa)"]);
   return (
-    <div className="mt-4 overflow-x-auto">
+    <ScrollAcross label="Consequences" className="mt-4">
       <table className="w-full text-sm" aria-busy={busy}>
         <thead>
           <tr className="border-b border-rule text-left align-bottom">
@@ -97,7 +98,7 @@ export function ConsequenceTable({ items, projectId, busy, chosen, onChoose }: P
           ))}
         </tbody>
       </table>
-    </div>
+    </ScrollAcross>
   );
 }
 

@@ -19,13 +19,25 @@ export function CoveragePanel({ projectId, initial }: { projectId: string; initi
       {data && (
         <dl className="mt-3 grid max-w-4xl grid-cols-[auto_auto_1fr] gap-x-4 gap-y-1.5 text-sm">
           <Gap title="Footings without a value in force" gap={data.footingsWithoutValue}>
-            {(item) => <Link href={`${at}/footings/${item.id}`}>{item.mark}</Link>}
+            {(item) => (
+              <Link className="inline-block min-w-6 py-0.5" href={`${at}/footings/${item.id}`}>
+                {item.mark}
+              </Link>
+            )}
           </Gap>
           <Gap title="Footings on a value that is not confirmed" gap={data.footingsOnUnconfirmed}>
-            {(item) => <Link href={`${at}/footings/${item.id}`}>{item.mark}</Link>}
+            {(item) => (
+              <Link className="inline-block min-w-6 py-0.5" href={`${at}/footings/${item.id}`}>
+                {item.mark}
+              </Link>
+            )}
           </Gap>
           <Gap title="Values that no footing is linked to" gap={data.valuesWithoutFooting}>
-            {(item) => <Link href={`${at}/values/${item.id}`}>{item.reference}</Link>}
+            {(item) => (
+              <Link className="inline-block min-w-6 py-0.5" href={`${at}/values/${item.id}`}>
+                {item.reference}
+              </Link>
+            )}
           </Gap>
           <Gap title="Zones without an exploratory hole" gap={data.zonesWithoutHole}>
             {(item) => item.name}

@@ -1,5 +1,6 @@
 import Link from "next/link";
 import type { ReactNode } from "react";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import { valueWords } from "@/lib/contracts/value-words";
 import type { CitedSource, FieldDifference, Signature, ValueRevision } from "@/lib/contracts/values";
 import { ConditionsList } from "./conditions-list";
@@ -65,7 +66,7 @@ export function RevisionHistory({ projectId, revisions, actions }: Props) {
 function Differences({ differences }: { differences: FieldDifference[] }) {
   if (differences.length === 0) return null;
   return (
-    <div className="overflow-x-auto">
+    <ScrollAcross label="Differences">
       <table className="mt-2 text-sm">
         <caption className="text-left text-ink-2">Changed against the revision before</caption>
         <thead>
@@ -101,7 +102,7 @@ function Differences({ differences }: { differences: FieldDifference[] }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </ScrollAcross>
   );
 }
 

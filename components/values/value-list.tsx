@@ -3,6 +3,7 @@
 import Link from "next/link";
 import { useDeferredValue, useState } from "react";
 import { Notice } from "@/components/account/notice";
+import { ScrollAcross } from "@/components/ui/scroll-across";
 import { useValues } from "@/lib/client/use-values";
 import type { ValueItem, ValueState, ValueList as Values } from "@/lib/contracts/values";
 import { StateSign, UnconfirmedSign } from "./value-sign";
@@ -78,7 +79,7 @@ export function ValueList({ projectId, initial, mayDraft }: Props) {
       {data && items.length === 0 ? (
         <p className="mt-4 text-ink-2">No value matches. Clear the search or choose any state.</p>
       ) : (
-        <div className="mt-4 overflow-x-auto">
+        <ScrollAcross label="Values in the register" className="mt-4">
           <table className="w-full text-sm">
             <thead>
               <tr className="border-b border-rule text-left align-bottom">
@@ -100,7 +101,7 @@ export function ValueList({ projectId, initial, mayDraft }: Props) {
               ))}
             </tbody>
           </table>
-        </div>
+        </ScrollAcross>
       )}
       {data && data.total > items.length && items.length > 0 && (
         <p className="mt-2 text-sm text-ink-2">
