@@ -39,7 +39,7 @@ export function distortionsOf(points: readonly Point[]): { pairs: Pair[]; worst:
   return { pairs, worst };
 }
 
-/** The usual limits that a distortion is held against: EN 1997-1 Annex H, read in transcription. */
+/** The usual limits that a distortion is held against: EN 1997-1 Annex H, read in a secondary copy. */
 const limits = [
   {
     from: 1 / 150,

@@ -13,7 +13,7 @@ function apart(one: number, other: number, digits: number): [string, string] {
 
 /** Says which of the value's stated conditions the footing is outside of. */
 export function collectOutside(
-  { footing, value }: FootingCheckInput,
+  { footing, loads, value }: FootingCheckInput,
   depth_m: number,
   tableLimit: string | null,
   findings: Finding[],
@@ -37,6 +37,15 @@ export function collectOutside(
       `The founding depth ${rounded(depth_m)} m is less than the smallest cover the value asks for, ${value.minFoundingDepth_m} m.`,
     );
   if (tableLimit !== null) add("table", tableLimit);
+  if (
+    value.kind === "parameters" &&
+    value.parameters.theory === "terzaghi" &&
+    loads.some((load) => load.horizontalB_kN !== 0 || load.horizontalL_kN !== 0)
+  )
+    add(
+      "no-inclination",
+      "The value is computed by Terzaghi's theory, which knows no inclined load, and horizontal loads act.",
+    );
 }
 
 /** Says which requirements one combination does not meet, each with the figures that decide. */

@@ -1,5 +1,6 @@
 import { defineMethod } from "@/lib/methods/define-method";
 import { checkFooting } from "./check-footing";
+import { explainCheck } from "./explain-check";
 import { footingCheckInput, footingCheckOutput } from "./input";
 import { ENGINE_VERSION } from "./version";
 
@@ -16,4 +17,8 @@ export const footingCheck = defineMethod({
   inputs: footingCheckInput,
   outputs: footingCheckOutput,
   compute: checkFooting,
+  lines: (input) => {
+    const { common, combinations } = explainCheck(input, checkFooting(input));
+    return [...common, ...combinations.flatMap(({ lines }) => lines)];
+  },
 });

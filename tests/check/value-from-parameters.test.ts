@@ -33,6 +33,14 @@ describe("a value computed from soil parameters", () => {
     );
   });
 
+  it("does not apply to a horizontal load where its theory knows none", () => {
+    const old = { ...value, parameters: { ...clay, theory: "terzaghi" } };
+    expect(checkFooting(pad({ value: old })).verdict).toBe("passes");
+    const result = checkFooting(pad({ loads: [{ horizontalL_kN: 5 }], value: old }));
+    expect(result.verdict).toBe("outside conditions");
+    expect(result.findings[0]).toMatchObject({ code: "no-inclination", severity: "outside" });
+  });
+
   it("keeps the direction of the horizontal load when the effective sides change places", () => {
     const sand = { ...clay, drainage: "drained", frictionAngle_deg: 30, cohesion_kPa: 0 };
     const one = checkFooting(

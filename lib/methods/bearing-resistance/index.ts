@@ -210,6 +210,8 @@ export const bearingResistance = defineMethod({
   limits: [
     "Homogeneous ground to about one breadth below the base, general shear, static load, level ground.",
     "EN 1997-1:2004 Annex D is informative and has no depth factor.",
+    "Hansen's depth factor, also in Vesić's set, steps down at D/B = 1, where the source goes over to the arctangent.",
+    "A horizontal load given as an angle is measured from the longer side.",
   ],
   inputs,
   outputs: z.object({

@@ -3,7 +3,7 @@ const PSF = 0.04788025898;
 
 export type Presumed = { soilClass: string; label: string; min_kPa: number | null; max_kPa: number | null };
 
-/** IBC 2012, Table 1806.2, printed in psf, by the table's own class numbers; read in transcription. */
+/** IBC 2012, Table 1806.2, printed in psf, by the table's own class numbers; read in a secondary copy. */
 export const ibc: readonly Presumed[] = (
   [
     ["1", "Crystalline bedrock", 12000],
