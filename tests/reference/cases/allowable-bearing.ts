@@ -50,7 +50,7 @@ export const allowableBearingCases: ReferenceCase[] = casesOf(
       method: "allowable-bearing",
       citation:
         "B. M. Das, Principles of Foundation Engineering, Terzaghi's square base, factor 4 on gross (edition not stated in the copy read)",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 1e-4 },
     },
     [

@@ -163,7 +163,7 @@ export const basePressureCases: ReferenceCase[] = [
       method,
       citation:
         "B. M. Das, Principles of Foundation Engineering, Ex. 6.5 p. 296 (edition not stated in the copy read)",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       // Its coefficients are rounded to four decimals of kip/ft².
       tolerance: { abs: 0.003 * KSF_kPa },
     },
@@ -192,7 +192,7 @@ export const basePressureCases: ReferenceCase[] = [
       method,
       citation:
         "B. M. Das, Principles of Foundation Engineering, Ex. 8.1 and 8.2 pp. 366 to 369 (edition not stated in the copy read)",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.005 * KSF_kPa },
     },
     [

@@ -11,7 +11,7 @@ export const bearingFactorCases: ReferenceCase[] = [
     {
       method: "bearing-factors",
       citation: GEC6_TABLE,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.051 },
     },
     (
@@ -36,7 +36,7 @@ export const bearingFactorCases: ReferenceCase[] = [
     {
       method: "bearing-factors",
       citation: SPANISH_TABLE,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.051 },
     },
     (
@@ -55,7 +55,7 @@ export const bearingFactorCases: ReferenceCase[] = [
     {
       method: "bearing-factors",
       citation: "B. M. Das, Principles of Geotechnical Engineering, 7th ed., Ex. 16.3 p. 595",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.006 },
     },
     [
@@ -71,7 +71,7 @@ export const bearingFactorCases: ReferenceCase[] = [
     {
       method: "bearing-factors",
       citation: "K. Terzaghi 1943 with Nγ of Kumbhojkar 1993, as printed in B. M. Das",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.006 },
     },
     [

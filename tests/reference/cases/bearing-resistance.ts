@@ -147,7 +147,7 @@ export const bearingResistanceCases: ReferenceCase[] = [
       method: "bearing-resistance",
       citation:
         "B. M. Das, Principles of Foundation Engineering, Terzaghi's square base (edition not stated in the copy read)",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 2e-3 },
     },
     [
@@ -173,7 +173,7 @@ export const bearingResistanceCases: ReferenceCase[] = [
     {
       method: "bearing-resistance",
       citation: "B. M. Das, Principles of Geotechnical Engineering, 7th ed., Ex. 16.1 p. 587",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 2e-3 },
     },
     [
@@ -200,7 +200,7 @@ export const bearingResistanceCases: ReferenceCase[] = [
       method: "bearing-resistance",
       citation:
         "B. M. Das, Principles of Geotechnical Engineering, 7th ed., Ex. 16.3 p. 595 and Ex. 16.4 p. 601",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 1e-3 },
     },
     [
@@ -243,7 +243,7 @@ export const bearingResistanceCases: ReferenceCase[] = [
     {
       method: "bearing-resistance",
       citation: "USACE EM 1110-1-1905 (2025), Appendix B, Ex. B-4, the highway form (no depth factor)",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.01 * KSF_kPa },
     },
     [
@@ -269,7 +269,7 @@ export const bearingResistanceCases: ReferenceCase[] = [
     {
       method: "bearing-resistance",
       citation: "FHWA NHI-06-089, Tables 8-4 and 8-5: shape factors of Vesić's set",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 5e-4 },
     },
     [

@@ -11,7 +11,7 @@ export const consolidationCases: ReferenceCase[] = [
       method: "settlement-consolidation",
       citation:
         "B. M. Das, Principles of Geotechnical Engineering, 7th ed. 2013, overconsolidated clay of 4 m",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.6 },
     },
     [
@@ -36,7 +36,7 @@ export const consolidationCases: ReferenceCase[] = [
       method: "settlement-consolidation",
       citation:
         "B. M. Das, Principles of Geotechnical Engineering, 7th ed. 2013, footing on clay with Simpson's mean stress",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.0007 * 25.4 },
     },
     [
@@ -59,7 +59,7 @@ export const consolidationCases: ReferenceCase[] = [
     {
       method: "settlement-consolidation",
       citation: `${DAS_PFE}, Ex. 5.10 p. 256 and Ex. 6.4 p. 284 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.15 },
     },
     [

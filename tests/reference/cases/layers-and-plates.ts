@@ -9,7 +9,7 @@ export const layeredCases: ReferenceCase[] = [
       method: "layered-bearing",
       citation:
         "FHWA-SA-02-054, Geotechnical Engineering Circular No. 6 (Kimmerling 2002), Eq. 5-17, Appendix B",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.006 },
     },
     [
@@ -31,7 +31,7 @@ export const layeredCases: ReferenceCase[] = [
     {
       method: "layered-bearing",
       citation: "USACE EM 1110-1-1905 (2025), Appendix B, Ex. B-3, Eq. 5-17",
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.005 },
     },
     [
@@ -53,7 +53,7 @@ export const layeredCases: ReferenceCase[] = [
     {
       method: "layered-bearing",
       citation: `${DAS_PFE}, a base of 5 ft by 10 ft at 12.5 ft, beside elastic theory`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 3e-3 },
     },
     [

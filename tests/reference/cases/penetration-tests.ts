@@ -10,7 +10,7 @@ export const sptCorrectionCases: ReferenceCase[] = [
     {
       method: "spt-correction",
       citation: `${DAS_PGE}, σ′ = 0.275 tsf with one atmosphere as 1 tsf`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.05 },
     },
     [
@@ -95,7 +95,7 @@ export const sptAllowableCases: ReferenceCase[] = [
     {
       method: "spt-allowable",
       citation: `${DAS_PFE}, Bowles's form`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 1e-3 },
     },
     (
@@ -115,7 +115,7 @@ export const sptAllowableCases: ReferenceCase[] = [
     {
       method: "spt-allowable",
       citation: `${DAS_PFE}, Ex. 6.2 p. 280, a mat (whose (B + 0.3)/B the book drops)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 0.07 },
     },
     [

@@ -11,7 +11,7 @@ export const presumptiveCases: ReferenceCase[] = [
     {
       method: "presumptive-bearing",
       citation: IBC,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 1e-3 },
     },
     (
@@ -30,7 +30,7 @@ export const presumptiveCases: ReferenceCase[] = [
     })),
   ),
   ...casesOf(
-    { method: "presumptive-bearing", citation: BS, status: "read in transcription", tolerance: { abs: 0 } },
+    { method: "presumptive-bearing", citation: BS, status: "read in a secondary copy", tolerance: { abs: 0 } },
     (
       [
         ["dense-gravel", 600, null],

@@ -15,7 +15,7 @@ export const elasticCases: ReferenceCase[] = [
     {
       method: "settlement-elastic",
       citation: WINTERKORN,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.02 },
     },
     (
@@ -66,7 +66,7 @@ export const elasticCases: ReferenceCase[] = [
     {
       method: "settlement-elastic",
       citation: `${DAS_PFE}, Ex. 5.4 p. 228: F1 = 0.641, F2 = 0.031, If = 0.709 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 0.002 },
     },
     [

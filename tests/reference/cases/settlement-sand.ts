@@ -54,7 +54,7 @@ export const schmertmannCases: ReferenceCase[] = [
     {
       method: "settlement-schmertmann",
       citation: `${DAS_PFE}, Ex. 5.6 p. 238, strip of 96 in with the diagram's peak at 0.5 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
     },
     [
       {
@@ -120,7 +120,7 @@ export const burlandCases: ReferenceCase[] = [
     {
       method: "settlement-burland-burbidge",
       citation: `${DAS_PFE}, Ex. 5.7 p. 244, whose rounded constants come out 2.5 % lower (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { rel: 0.03 },
     },
     [

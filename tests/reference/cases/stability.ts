@@ -54,7 +54,7 @@ export const effectiveAreaCases: ReferenceCase[] = [
     {
       method: "effective-area",
       citation: `B. M. Das, Principles of Geotechnical Engineering, 7th ed., Ex. 16.4 p. 601`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 1e-9 },
     },
     [
@@ -73,7 +73,7 @@ export const slidingCases: ReferenceCase[] = [
     {
       method: "sliding",
       citation: `${DAS}, Ex. 8.3 p. 370 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.005 },
     },
     [
@@ -187,7 +187,7 @@ export const overturningCases: ReferenceCase[] = [
     {
       method: "overturning",
       citation: `${DAS}, Ex. 8.1 p. 366 and Ex. 8.4 p. 372 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 0.006 },
     },
     [

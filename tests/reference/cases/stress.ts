@@ -83,7 +83,7 @@ export const stressCases: ReferenceCase[] = [
     {
       method: "stress-increase",
       citation: `${DAS_PFE}, Ex. 5.1 p. 212 and Ex. 5.10 p. 256 (edition not stated in the copy read)`,
-      status: "read in transcription",
+      status: "read in a secondary copy",
       tolerance: { abs: 6e-4 },
     },
     (
