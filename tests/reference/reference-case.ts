@@ -1,5 +1,9 @@
 /** How far a value was checked against its source. */
-export type Status = "read in a secondary copy" | "from memory" | "computed independently" | "common practice";
+export type Status =
+  | "read in a secondary copy"
+  | "from memory"
+  | "computed independently"
+  | "common practice";
 
 /** How near an answer must come: the rounding that the source prints, for one figure or for all. */
 export type Tolerance = { abs: number } | { rel: number };

@@ -30,7 +30,12 @@ export const presumptiveCases: ReferenceCase[] = [
     })),
   ),
   ...casesOf(
-    { method: "presumptive-bearing", citation: BS, status: "read in a secondary copy", tolerance: { abs: 0 } },
+    {
+      method: "presumptive-bearing",
+      citation: BS,
+      status: "read in a secondary copy",
+      tolerance: { abs: 0 },
+    },
     (
       [
         ["dense-gravel", 600, null],

@@ -54,6 +54,7 @@ export const elasticCases: ReferenceCase[] = [
         [2, 1.196],
         [3, 1.412],
         [5, 1.702],
+        [10, 2.119],
       ] as const
     ).map(([length_m, influence]) => ({
       id: `elastic-rigid-${length_m}`,
