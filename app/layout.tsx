@@ -1,6 +1,7 @@
 import "@fontsource-variable/roboto/wght.css";
 import "./globals.css";
 import type { Metadata, Viewport } from "next";
+import { connection } from "next/server";
 import type { ReactNode } from "react";
 
 export const metadata: Metadata = {
@@ -23,8 +24,9 @@ export const viewport: Viewport = {
   ],
 };
 
-/** The paper that every page lies on. */
-export default function RootLayout({ children }: { children: ReactNode }) {
+/** The paper that every page lies on. Made at each request: the content policy lets only scripts with its own nonce run. */
+export default async function RootLayout({ children }: { children: ReactNode }) {
+  await connection();
   return (
     <html lang="en-GB">
       <body>{children}</body>
