@@ -84,7 +84,10 @@ export function ChangeHead({
     <>
       <p className={link ? "text-base" : "text-lg"}>
         {link ? (
-          <Link className="underline" href={`/projects/${projectId}/revisions/${change.id}`}>
+          <Link
+            className="inline-block min-h-6 leading-6 underline"
+            href={`/projects/${projectId}/revisions/${change.id}`}
+          >
             {change.title}
           </Link>
         ) : (

@@ -20,21 +20,21 @@ export function CoveragePanel({ projectId, initial }: { projectId: string; initi
         <dl className="mt-3 grid max-w-4xl grid-cols-[auto_auto_1fr] gap-x-4 gap-y-1.5 text-sm">
           <Gap title="Footings without a value in force" gap={data.footingsWithoutValue}>
             {(item) => (
-              <Link className="inline-block min-w-6 py-0.5" href={`${at}/footings/${item.id}`}>
+              <Link className="inline-block min-h-6 min-w-6 leading-6" href={`${at}/footings/${item.id}`}>
                 {item.mark}
               </Link>
             )}
           </Gap>
           <Gap title="Footings on a value that is not confirmed" gap={data.footingsOnUnconfirmed}>
             {(item) => (
-              <Link className="inline-block min-w-6 py-0.5" href={`${at}/footings/${item.id}`}>
+              <Link className="inline-block min-h-6 min-w-6 leading-6" href={`${at}/footings/${item.id}`}>
                 {item.mark}
               </Link>
             )}
           </Gap>
           <Gap title="Values that no footing is linked to" gap={data.valuesWithoutFooting}>
             {(item) => (
-              <Link className="inline-block min-w-6 py-0.5" href={`${at}/values/${item.id}`}>
+              <Link className="inline-block min-h-6 min-w-6 leading-6" href={`${at}/values/${item.id}`}>
                 {item.reference}
               </Link>
             )}
@@ -68,7 +68,7 @@ function Gap<Item extends { id: string }>({
         {gap.total === 0 ? (
           "none"
         ) : (
-          <ul className="flex flex-wrap gap-x-3 [&_a]:underline">
+          <ul className="flex flex-wrap gap-x-3 gap-y-1 [&_a]:underline">
             {gap.first.slice(0, 12).map((item) => (
               <li key={item.id}>{children(item)}</li>
             ))}

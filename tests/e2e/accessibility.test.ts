@@ -10,6 +10,17 @@ type Violation = { id: string; impact: string | null; nodes: { target: string[] 
 
 /** Serious and critical findings of an accessibility scan (WCAG 2.2 AA) of what the page shows now. */
 async function findings(reader: Reader): Promise<string[]> {
+  // As high as the page is long: what only lies under the title block until it is scrolled is not covered.
+  const { width } = reader.page.viewportSize() ?? { width: 1440 };
+  const long = await reader.page.evaluate(() => document.documentElement.scrollHeight);
+  await reader.page.setViewportSize({ width, height: Math.min(6000, long + 200) });
+  await reader.page.waitForTimeout(300);
+  const found = await scan(reader);
+  await reader.page.setViewportSize({ width, height: 900 });
+  return found;
+}
+
+async function scan(reader: Reader): Promise<string[]> {
   // Evaluated in the page's own world, past its content policy, which is what keeps scripts of others out.
   await reader.page.evaluate(axe);
   const violations = (await reader.page.evaluate(`axe.run(document, {
