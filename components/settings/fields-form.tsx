@@ -52,6 +52,8 @@ export function FieldsForm({
   const [busy, setBusy] = useState(false);
   const [refused, setRefused] = useState<Refused>();
   const [done, setDone] = useState(false);
+  /** The revision that the last answer gave: a second change may come before the page has been read anew. */
+  const given = useRef(0);
   const fields = groups.flatMap((group) => group.fields);
 
   const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
@@ -60,11 +62,13 @@ export function FieldsForm({
     setBusy(true);
     setDone(false);
     const body = bodyOf(fields, new FormData(event.currentTarget), onlyChanged ?? false);
-    const answer = await send<{ id?: string }>(path, method, body, revision);
+    const seen = revision === undefined ? undefined : Math.max(revision, given.current);
+    const answer = await send<{ id?: string; revision?: number }>(path, method, body, seen);
     setBusy(false);
     setRefused(answer.done ? undefined : answer.refused);
     if (answer.done) {
       setDone(true);
+      given.current = answer.body?.revision ?? 0;
       for (const name of empties) {
         const input = form.current?.elements.namedItem(name);
         if (input instanceof HTMLInputElement) input.value = "";
