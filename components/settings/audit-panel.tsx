@@ -80,7 +80,9 @@ export function AuditPanel({ projectId, first }: Props) {
                 <td className="py-1 pr-3 break-all">{event.subject}</td>
                 <td className="py-1">
                   <details>
-                    <summary>{String(event.detail.reason ?? "") || "Before and after"}</summary>
+                    <summary className="min-h-6 leading-6">
+                      {String(event.detail.reason ?? "") || "Before and after"}
+                    </summary>
                     <pre className="max-w-prose whitespace-pre-wrap break-all">
                       {JSON.stringify(event.detail, null, 2)}
                     </pre>

@@ -13,7 +13,7 @@ async function findings(reader: Reader): Promise<string[]> {
   // As high as the page is long: what only lies under the title block until it is scrolled is not covered.
   const { width } = reader.page.viewportSize() ?? { width: 1440 };
   const long = await reader.page.evaluate(() => document.documentElement.scrollHeight);
-  await reader.page.setViewportSize({ width, height: Math.min(6000, long + 200) });
+  await reader.page.setViewportSize({ width, height: Math.min(16_000, long + 200) });
   await reader.page.waitForTimeout(300);
   const found = await scan(reader);
   await reader.page.setViewportSize({ width, height: 900 });

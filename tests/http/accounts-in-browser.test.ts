@@ -126,6 +126,9 @@ describe.runIf(built && present)("the account pages in Chromium", () => {
     await line.getByLabel("Geotechnical engineer").check();
     await line.getByRole("button", { name: /Change roles/ }).click();
     await page.getByText("has other roles from the next request on").waitFor();
+    // Read anew, the line is made again with the new roles as what it holds.
+    const box = line.getByLabel("Geotechnical engineer");
+    await expect.poll(() => box.evaluate((input) => (input as HTMLInputElement).defaultChecked)).toBe(true);
     await expect.poll(() => line.count()).toBe(1);
     expect(await line.getByLabel("Geotechnical engineer").isChecked()).toBe(true);
     await line.getByRole("button", { name: "Remove" }).click();
